@@ -15,6 +15,8 @@ export interface ElementTrace {
   readonly kind: 'layers' | 'lumped' | 'section'
   /** Heat stored above 0 °C at the end of each hour [J]. */
   readonly stored_J: Float64Array
+  /** The same at the start of the year's first hour [J]. */
+  readonly startStored_J: number
   /** Heat that comes in from outdoors and from constant boundaries, mean of the hour [W], absorbed sun included. */
   readonly outside_W: Float64Array
   /** Modes at the end of each hour, `state[hour * modes + k]`; null when not kept. */
@@ -29,10 +31,17 @@ export interface ProbeTrace {
 }
 
 /**
- * One simulated year: 8,760 hourly values each. Hour i runs from i to i + 1.
+ * One simulated year: 8,760 hourly values each. Entry i is hour i of the calendar year (0 begins on
+ * 1 January), in whatever order they were lived through: a charging year that begins in October has
+ * its October to December before its January. `firstHour` is the hour it began with (0 for the
+ * repeating year), so entry firstHour - 1 is its last hour, and the hour before entry firstHour is the
+ * start state, not entry firstHour - 1.
  * Flows are means of the hour, positive into the room, unless said otherwise.
  */
 export interface YearTrace {
+  readonly firstHour: number
+  /** Room air at the start of the first hour [°C]. */
+  readonly startAir_C: number
   readonly air_C: Float64Array
   readonly radiant_C: Float64Array
   /** Mean of air and radiant temperature [°C]. */

@@ -85,7 +85,12 @@ export interface WindowModel {
   /** Fins at both sides, seen from outside: depth, and gap between jamb and fin. */
   readonly fins: { readonly depth_m: number; readonly gap_m: number } | null
   /** Night shutters: thermal resistance added while closed [m² K/W]; hours in local standard time, may pass midnight; closed only when the sun is down. */
-  readonly shutter: { readonly resistance_m2KW: number; readonly from_h: number; readonly to_h: number; readonly months: readonly number[] } | null
+  readonly shutter: {
+    readonly resistance_m2KW: number
+    readonly from_h: number
+    readonly to_h: number
+    readonly months: readonly number[]
+  } | null
   /** Seasonal shade: share of the sun that still passes in the given months (1 to 12). */
   readonly shade: { readonly passes: number; readonly months: readonly number[] } | null
 }
