@@ -9,7 +9,9 @@ export const root = path.dirname(path.dirname(fileURLToPath(import.meta.url)))
 
 /** Installs the locked packages when they are missing or the lock file has changed since. */
 export function installPackages() {
-  const lock = createHash('sha256').update(readFileSync(path.join(root, 'package-lock.json'))).digest('hex')
+  const lock = createHash('sha256')
+    .update(readFileSync(path.join(root, 'package-lock.json')))
+    .digest('hex')
   const stamp = path.join(root, 'node_modules', '.loamkeep-lock')
   if (existsSync(stamp) && readFileSync(stamp, 'utf8') === lock) return
   process.stderr.write('Installing packages from the lock file …\n')

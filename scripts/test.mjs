@@ -11,7 +11,10 @@ const filter = process.argv.slice(2)
 const bin = (name) => path.join(root, 'node_modules', '.bin', name)
 const run = (title, command, args) => {
   process.stdout.write(`\n— ${title}\n`)
-  return spawnSync(command, args, { cwd: root, stdio: 'inherit', shell: process.platform === 'win32' }).status === 0
+  return (
+    spawnSync(command, args, { cwd: root, stdio: 'inherit', shell: process.platform === 'win32' }).status ===
+    0
+  )
 }
 
 let passed = 0
@@ -19,7 +22,13 @@ let failed = 0
 const count = (ok) => (ok ? passed++ : failed++)
 if (filter.length === 0) {
   count(run('types', bin('tsc'), ['--noEmit']))
-  count(run('types of the engine, without Node and DOM', bin('tsc'), ['--noEmit', '-p', 'server/engine/tsconfig.json']))
+  count(
+    run('types of the engine, without Node and DOM', bin('tsc'), [
+      '--noEmit',
+      '-p',
+      'server/engine/tsconfig.json',
+    ]),
+  )
   count(run('lint', bin('eslint'), ['.', '--max-warnings', '0']))
   count(run('format', bin('prettier'), ['--check', '.', '--log-level', 'warn']))
 }
@@ -38,7 +47,9 @@ if (existsSync(report)) {
   passed += result.numPassedTests
   failed += result.numFailedTests
   // A file that cannot be loaded has no failed test of its own.
-  failed += result.testResults.filter((file) => file.status === 'failed' && file.assertionResults.length === 0).length
+  failed += result.testResults.filter(
+    (file) => file.status === 'failed' && file.assertionResults.length === 0,
+  ).length
 }
 if (!green && failed === 0) failed = 1
 rmSync(folder, { recursive: true, force: true })

@@ -5,6 +5,8 @@ import { installPackages, root } from './install-packages.mjs'
 
 installPackages()
 const [script, ...args] = process.argv.slice(2)
-const child = spawn(process.execPath, ['--import', 'tsx', path.join(root, script), ...args], { stdio: 'inherit' })
+const child = spawn(process.execPath, ['--import', 'tsx', path.join(root, script), ...args], {
+  stdio: 'inherit',
+})
 for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => child.kill(signal))
 child.on('exit', (code, signal) => process.exit(code ?? (signal ? 1 : 0)))

@@ -1,0 +1,296 @@
+import { HOURS, HOUR_S, type ClimateYear } from '../climate/climate-year.ts'
+import { hourStep } from '../conduction/hour-step.ts'
+import type { ReducedElement } from '../conduction/thermal-system.ts'
+import { AIR_HEAT_JKGK, airDensity } from './air.ts'
+import type { Driven } from './driven.ts'
+import type { HouseElement, HouseModel, RoomSurface } from './house-model.ts'
+import { outdoorDrives, type Drives } from './drives.ts'
+import { reduceElement, type ElementCache } from './element-cache.ts'
+import { windowSeries, type WindowSeries } from './window-series.ts'
+import { monthOfHour } from './calendar.ts'
+
+/** One surface of the room as the hour loop sees it. */
+export interface RoomFace {
+  readonly surface: RoomSurface
+  /** Index of its element in `elements`. */
+  readonly element: number
+  /** Its boundary group there. */
+  readonly group: number
+  /** Film conductance, area times film [W/K]. */
+  readonly film_WK: number
+  /** Convective and radiative share of the film, summing to 1. */
+  readonly convective: number
+  readonly radiative: number
+  /** Short-wave and radiative gains that it absorbs, by hour [W]. */
+  readonly absorbed_W: Float64Array
+  /** The part of `absorbed_W` that is sun [W]. */
+  readonly sun_W: Float64Array
+  /** Share of radiant heating power that falls on it. */
+  readonly radiantShare: number
+}
+
+/**
+ * A conducting element, ready to be stepped. Inputs stand in `input`: one column for each room group
+ * (constant within the hour), two for each outdoor group (start and end of the hour), one for each
+ * constant group.
+ */
+export interface RunningElement {
+  readonly name: string
+  readonly kind: HouseElement['spec']['kind']
+  readonly size: number
+  readonly reduced: ReducedElement
+  readonly modes: number
+  readonly columns: number
+  /** Modes; written by the hour loop. */
+  readonly state: Float64Array
+  readonly input: Float64Array
+  /** decay, length modes. */
+  readonly decay: Float64Array
+  /** `gain[k * columns + j]`. */
+  readonly gain: Float64Array
+  /** Whole element: flow into it from group g is -Σ_k history[g * modes + k] m_k + Σ_j response[g * columns + j] input_j [W]. */
+  readonly history: Float64Array
+  readonly response: Float64Array
+  /** Indices into `faces`, with the group and column of each. */
+  readonly room: readonly { readonly face: number; readonly group: number; readonly column: number }[]
+  readonly outdoor: readonly { readonly group: number; readonly column: number; readonly drive: Driven }[]
+  readonly constant: readonly { readonly group: number; readonly column: number }[]
+}
+
+/** Everything the hour loop needs, allocated and checked once. */
+export interface RunningHouse {
+  readonly model: HouseModel
+  readonly climate: ClimateYear
+  readonly elements: readonly RunningElement[]
+  readonly faces: readonly RoomFace[]
+  readonly windows: WindowSeries
+  /** Constant part of the room matrix: air-air, air-radiant, radiant-radiant [W/K]. */
+  readonly matrix: { readonly aa: number; readonly ar: number; readonly rr: number }
+  /** Absorbed sun and radiant gains as they reach air and radiant node, by hour [W]. */
+  readonly sunOnAir_W: Float64Array
+  readonly sunOnRadiant_W: Float64Array
+  /** The same for 1 W of radiant heating. */
+  readonly radiantOnAir: number
+  readonly radiantOnRadiant: number
+  readonly airCapacity_JK: number
+  /** Density times specific heat of air at the site [J/(m³ K)]. */
+  readonly airHeat_Jm3K: number
+  /** Month (0 to 11) by hour. */
+  readonly month: Uint8Array
+  /** Room air at the start of the next hour [°C]; written by the hour loop. */
+  readonly air: { start_C: number }
+}
+
+/**
+ * Checks a house once, reduces what conducts and lays out all hourly series.
+ *
+ * @param cache reduced elements by their spec; hand the same one in again when only windows, air or
+ *   habits changed, and nothing is reduced twice
+ * @throws RangeError with the name of the element or window and what is wrong with it
+ */
+export function assemble(
+  model: HouseModel,
+  climate: ClimateYear,
+  cache: ElementCache = new Map(),
+): RunningHouse {
+  const drives = outdoorDrives(model, climate)
+  const faces: RoomFace[] = []
+  const elements = model.elements.map((element, index) => {
+    const reduced = reduceElement(element, cache)
+    return runningElement(element, index, reduced, drives, faces)
+  })
+  if (faces.length === 0) throw new RangeError('The room has no surface.')
+  const windows = windowSeries(model, climate, drives, faces)
+  shareRadiantGains(model, faces)
+
+  const density = airDensity(climate.place.elevation_m)
+  const airHeat_Jm3K = density * AIR_HEAT_JKGK
+  const radiant = roomSums(elements, faces, (face) => face.radiantShare)
+  const sunOnAir_W = new Float64Array(HOURS)
+  const sunOnRadiant_W = new Float64Array(HOURS)
+  addAbsorbed(elements, faces, sunOnAir_W, sunOnRadiant_W)
+
+  const month = new Uint8Array(HOURS)
+  for (let hour = 0; hour < HOURS; hour++) month[hour] = monthOfHour(hour)
+  return {
+    model,
+    climate,
+    elements,
+    faces,
+    windows,
+    matrix: roomMatrix(elements, faces),
+    sunOnAir_W,
+    sunOnRadiant_W,
+    radiantOnAir: radiant.air,
+    radiantOnRadiant: radiant.radiant,
+    airCapacity_JK: airHeat_Jm3K * model.room.volume_m3 * model.room.airCapacityFactor,
+    airHeat_Jm3K,
+    month,
+    air: { start_C: 15 },
+  }
+}
+
+function runningElement(
+  element: HouseElement,
+  index: number,
+  reduced: ReducedElement,
+  drives: Drives,
+  faces: RoomFace[],
+): RunningElement {
+  const { modes } = reduced
+  const step = hourStep(reduced, HOUR_S)
+  const groups = reduced.boundaries.length
+  const size = element.size
+  const room: RunningElement['room'][number][] = []
+  const outdoor: RunningElement['outdoor'][number][] = []
+  const constant: (RunningElement['constant'][number] & { temperature_C: number })[] = []
+  let columns = 0
+  reduced.boundaries.forEach((name, group) => {
+    const link = element.links[name]
+    if (!link) throw new RangeError(`${element.name}: nothing is said about its boundary "${name}".`)
+    if (link.to === 'room') {
+      const { surface } = link
+      const film = surface.convective_Wm2K + surface.radiative_Wm2K
+      const film_WK = reduced.conductance_WK[group] * size
+      if (Math.abs(film_WK - film * surface.area_m2) > 1e-6 * film_WK)
+        throw new RangeError(
+          `${surface.name}: its area ${surface.area_m2} m² times its film ${film} W/m²K is not the ${film_WK} W/K of its element.`,
+        )
+      room.push({ face: faces.length, group, column: columns++ })
+      faces.push({
+        surface,
+        element: index,
+        group,
+        film_WK,
+        convective: surface.convective_Wm2K / film,
+        radiative: surface.radiative_Wm2K / film,
+        absorbed_W: new Float64Array(HOURS),
+        sun_W: new Float64Array(HOURS),
+        radiantShare: 0,
+      })
+    } else if (link.to === 'outdoor') {
+      outdoor.push({ group, column: columns, drive: drives.of(link.exposure) })
+      columns += 2
+    } else {
+      constant.push({ group, column: columns++, temperature_C: link.temperature_C })
+    }
+  })
+
+  const gain = new Float64Array(modes * columns)
+  const response = new Float64Array(groups * columns)
+  const history = new Float64Array(groups * modes)
+  const fill = (group: number, column: number, start: number, end: number) => {
+    for (let k = 0; k < modes; k++) {
+      const at = k * groups + group
+      gain[k * columns + column] += start * step.gain0[at] + end * step.gain1[at]
+    }
+    for (let g = 0; g < groups; g++) {
+      const at = g * groups + group
+      response[g * columns + column] += size * (start * step.response0[at] + end * step.response1[at])
+    }
+  }
+  for (const { group, column } of room) fill(group, column, 1, 1)
+  for (const { group, column } of constant) fill(group, column, 1, 1)
+  for (const { group, column } of outdoor) {
+    fill(group, column, 1, 0)
+    fill(group, column + 1, 0, 1)
+  }
+  for (let g = 0; g < groups; g++)
+    for (let k = 0; k < modes; k++) history[g * modes + k] = size * step.meanState[k * groups + g]
+
+  const input = new Float64Array(columns)
+  for (const { column, temperature_C } of constant) input[column] = temperature_C
+  return {
+    name: element.name,
+    kind: element.spec.kind,
+    size,
+    reduced,
+    modes,
+    columns,
+    state: new Float64Array(modes),
+    input,
+    decay: step.decay,
+    gain,
+    history,
+    response,
+    room,
+    outdoor,
+    constant,
+  }
+}
+
+/** Radiant gains fall on all faces by area, hour of the day by hour of the day. */
+function shareRadiantGains(model: HouseModel, faces: RoomFace[]): void {
+  const area = faces.reduce((sum, face) => sum + face.surface.area_m2, 0)
+  faces.forEach((face, k) => {
+    const share = face.surface.area_m2 / area
+    faces[k] = { ...face, radiantShare: share }
+    for (let hour = 0; hour < HOURS; hour++)
+      face.absorbed_W[hour] = face.sun_W[hour] + share * model.gains.radiative_W[hour % 24]
+  })
+}
+
+/**
+ * What heat absorbed at the faces does to the two room nodes: a part passes the film to air and
+ * radiant node, the rest goes into the element at once:  Σ_k f_k (W_k - Σ_l R_kl W_l / G_l)
+ */
+function roomSums(
+  elements: readonly RunningElement[],
+  faces: readonly RoomFace[],
+  heat: (face: RoomFace) => number,
+): { air: number; radiant: number } {
+  let air = 0
+  let radiant = 0
+  for (const element of elements)
+    for (const row of element.room) {
+      const face = faces[row.face]
+      let rest = heat(face)
+      for (const col of element.room)
+        rest -=
+          (element.response[row.group * element.columns + col.column] * heat(faces[col.face])) /
+          faces[col.face].film_WK
+      air += face.convective * rest
+      radiant += face.radiative * rest
+    }
+  return { air, radiant }
+}
+
+function addAbsorbed(
+  elements: readonly RunningElement[],
+  faces: readonly RoomFace[],
+  air: Float64Array,
+  radiant: Float64Array,
+) {
+  for (let k = 0; k < faces.length; k++) {
+    // Linear in each face: find what 1 W there does, then scale its series.
+    const unit = roomSums(elements, faces, (face) => (face === faces[k] ? 1 : 0))
+    const { absorbed_W } = faces[k]
+    for (let hour = 0; hour < HOURS; hour++) {
+      air[hour] += unit.air * absorbed_W[hour]
+      radiant[hour] += unit.radiant * absorbed_W[hour]
+    }
+  }
+}
+
+/** Conductances among air, radiant node and the elements' present response, all faces. */
+function roomMatrix(elements: readonly RunningElement[], faces: readonly RoomFace[]): RunningHouse['matrix'] {
+  let aa = 0
+  let ar = 0
+  let rr = 0
+  for (const face of faces) {
+    aa += face.film_WK * face.convective * (1 - face.convective)
+    ar -= face.film_WK * face.convective * face.radiative
+    rr += face.film_WK * face.radiative * (1 - face.radiative)
+  }
+  for (const element of elements)
+    for (const row of element.room)
+      for (const col of element.room) {
+        const response = element.response[row.group * element.columns + col.column]
+        const a = faces[row.face]
+        const b = faces[col.face]
+        aa += a.convective * response * b.convective
+        ar += a.convective * response * b.radiative
+        rr += a.radiative * response * b.radiative
+      }
+  return { aa, ar, rr }
+}
