@@ -1,0 +1,26 @@
+/** Days of the months of a year without 29 February. */
+export const MONTH_DAYS: readonly number[] = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31]
+
+/** Day of the year (0 to 365) on which each month starts; 13 entries, the last is 365. */
+export const MONTH_STARTS: readonly number[] = MONTH_DAYS.reduce<number[]>(
+  (starts, days) => [...starts, starts[starts.length - 1] + days],
+  [0],
+)
+
+const NAMES = 'January February March April May June July August September October November December'
+export const MONTH_NAMES: readonly string[] = NAMES.split(' ')
+
+/** Month 0 to 11 of day 0 to 364. */
+export function monthOfDay(day: number): number {
+  let month = 0
+  while (day >= MONTH_STARTS[month + 1]) month++
+  return month
+}
+
+/** "5 March 14:00" for the hour that ends then; `index` 0 to 8759, hours end at 01:00 to 24:00. */
+export function hourName(index: number): string {
+  const day = Math.floor(index / 24)
+  const month = monthOfDay(day)
+  const hour = (index % 24) + 1
+  return `${day - MONTH_STARTS[month] + 1} ${MONTH_NAMES[month]} ${String(hour).padStart(2, '0')}:00`
+}
