@@ -35,14 +35,15 @@ const SENTINELS = [99.9, 999, 999.9, 999.99, 9999, 99999, 77777, 88888, 999999, 
  *
  * @param value in the unit of the quantity
  * @param line  of the file, for the message
+ * @param raw   the value as the file has it, before its unit was converted
  */
-export function plausible(quantity: Quantity, value: number, line: number): number {
+export function plausible(quantity: Quantity, value: number, line: number, raw = value): number {
   if (value >= quantity.low && value <= quantity.high) return value
   const shown = `the ${quantity.name} is ${Number(value.toPrecision(7))} ${quantity.unit}`
-  if (SENTINELS.some((mark) => Math.abs(Math.abs(value) - mark) < 1e-6)) {
+  if (SENTINELS.some((mark) => Math.abs(Math.abs(raw) - mark) < 1e-6)) {
     throw new ClimateFileError(
       line,
-      `${shown}, a mark for a missing value. Fill the gap or take another year.`,
+      `the ${quantity.name} is ${raw}, a mark for a missing value. Fill the gap or take another year.`,
     )
   }
   throw new ClimateFileError(

@@ -38,6 +38,19 @@ export function skyTemperature(outdoor_C: number, emissivity: number, cloud: num
   return (outdoor_C + 273.15) * eps ** 0.25 - 273.15
 }
 
+/** Stefan-Boltzmann constant [W/(m² K⁴)], CODATA. */
+const SIGMA = 5.670374e-8
+
+/** Long-wave radiation that the sky sends down [W/m²] at its effective temperature. */
+export function skyRadiation(sky_C: number): number {
+  return SIGMA * (sky_C + 273.15) ** 4
+}
+
+/** Effective temperature [°C] of a sky that sends down so much long-wave radiation [W/m²]. */
+export function skyFromRadiation(radiation_Wm2: number): number {
+  return (radiation_Wm2 / SIGMA) ** 0.25 - 273.15
+}
+
 /**
  * Cloud share from the daily clearness index, where nobody observed clouds: clear at 0.75, overcast at
  * 0.20, straight between. A rule fitted to the long-wave radiation of two sites; an assumption elsewhere.

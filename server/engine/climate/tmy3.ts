@@ -58,7 +58,7 @@ export function readTmy3(text: string): ClimateYear {
     const at = columnAt(header, column)
     return Float64Array.from(rows, (cells, i) => {
       const value = cellNumber(cells[at], quantity.name, i + 3)
-      return plausible(quantity, isMark(value) ? value : value * factor, i + 3)
+      return plausible(quantity, value * factor, i + 3, value)
     })
   }
   const outdoor_C = series(COLUMNS.outdoor, QUANTITIES.outdoor)
@@ -90,8 +90,6 @@ export function readTmy3(text: string): ClimateYear {
     sky_C: skyTemperatures({ outdoor_C, dewPoint_C, pressure_Pa, cloud }),
   }
 }
-
-const isMark = (value: number): boolean => value <= -9000
 
 function readStation(cells: readonly string[]): ClimatePlace {
   const [, name, state] = cells
