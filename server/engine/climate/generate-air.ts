@@ -1,5 +1,5 @@
 import { HOURS } from './climate-year.ts'
-import { dailyMeans } from './generate-temperature.ts'
+import { dailyMeans } from './day-values.ts'
 import { magnusPressure } from './humidity.ts'
 import { betweenNoons, DAY_MONTHS, monthCurve, monthMeans } from './month-curve.ts'
 import type { MonthlyNormals } from './normals.ts'

@@ -63,3 +63,22 @@ export function betweenNoons(daily: Float64Array, time_h: number): number {
   const share = noons - before
   return daily[(before + 365) % 365] * (1 - share) + daily[(before + 366) % 365] * share
 }
+
+/**
+ * Noon points whose straight connections have the given daily means: a day's mean takes three quarters from
+ * its own noon and an eighth from each neighbour's, which is undone here.
+ *
+ * @param means 365 daily means
+ */
+export function noonPoints(means: Float64Array): Float64Array {
+  let points = Float64Array.from(means)
+  // the error halves at least with each round
+  for (let round = 0; round < 30; round++) {
+    const at = points
+    points = at.map((value, day) => {
+      const reached = 0.75 * value + 0.125 * (at[(day + 364) % 365] + at[(day + 1) % 365])
+      return value + means[day] - reached
+    })
+  }
+  return points
+}
