@@ -29,6 +29,7 @@ interface NormalsRow {
   readonly highest_C: readonly number[]
   readonly lowest_C: readonly number[]
   readonly global_kWhm2day: readonly number[]
+  readonly diffuse_kWhm2day?: readonly number[]
   readonly dewPoint_C: readonly number[]
   readonly wind_ms: readonly number[]
   readonly pressure_hPa: readonly number[]
@@ -57,6 +58,7 @@ export function parseNormals(text: string): readonly BuiltInPlace[] {
       highest_C: row.highest_C,
       lowest_C: row.lowest_C,
       global_kWhm2day: row.global_kWhm2day,
+      diffuse_kWhm2day: row.diffuse_kWhm2day,
       dewPoint_C: row.dewPoint_C,
       wind_ms: row.wind_ms,
       pressure_Pa: row.pressure_hPa.map((value) => value * 100),

@@ -9,6 +9,7 @@ import { firstHarmonic } from '#engine/climate/harmonic.ts'
 import { dewPointFromHumidity } from '#engine/climate/humidity.ts'
 import { monthMeans } from '#engine/climate/month-curve.ts'
 import { hourlyCloud, skyRadiation, skyTemperatures } from '#engine/climate/sky.ts'
+import type { MonthlyNormals } from '#engine/climate/normals.ts'
 import { sunHours } from '#engine/climate/solar-day.ts'
 import { readTmy3 } from '#engine/climate/tmy3.ts'
 import { normalsOf, yearStatistics } from '#engine/climate/year-statistics.ts'
@@ -204,13 +205,14 @@ function closures(inputs: EvidenceInputs): Check[] {
     const temperature_C = monthMeans(dailyMeans(year.outdoor_C))
     const radiation = monthMeans(dailyMeans(year.global_Wm2)).map((value) => value * 0.024)
     const furthest_K = Math.max(...temperature_C.map((value, m) => Math.abs(value - normals.mean_C[m])))
+    const furthest_share = beamShareDeviation(normals, year)
     const furthest_pct = Math.max(
       ...radiation.map((value, m) => {
         const wanted = normals.global_kWhm2day[m]
         return wanted === 0 ? 100 * value : 100 * Math.abs(value / wanted - 1)
       }),
     )
-    return { place, furthest_K, furthest_pct }
+    return { place, furthest_K, furthest_pct, furthest_share }
   })
   const rows = (id: string, title: string, source: string, kelvin: number, percent: number): Check[] => {
     const common = { source, provenance: 'looked up', expected: 0 } as const
@@ -248,7 +250,29 @@ function closures(inputs: EvidenceInputs): Check[] {
       Math.max(...deviations.map(({ furthest_K }) => furthest_K)),
       Math.max(...deviations.map(({ furthest_pct }) => furthest_pct)),
     ),
+    check({
+      id: 'CLI-05/all/beam',
+      title:
+        'places with known diffuse radiation, months above 0.5 kWh/(m² day): largest deviation of the share of beam',
+      source: 'monthly sums of TMY3 files, data/climates/normals.json',
+      provenance: 'looked up',
+      unit: '1',
+      expected: 0,
+      tolerance: 0.02,
+      computed: Math.max(...deviations.map(({ furthest_share }) => furthest_share)),
+    }),
   ]
+}
+
+/**
+ * Largest deviation of a month's share of beam from the normals; 0 where these do not say. Months below
+ * 0.5 kWh/(m² day) are left out: normals of two decimals say too little about a share there.
+ */
+function beamShareDeviation(normals: MonthlyNormals, year: ClimateYear): number {
+  const wanted = normals.diffuse_kWhm2day
+  if (wanted === undefined) return 0
+  const shares = yearStatistics(year).monthBeamShares
+  return Math.max(...shares.map((share, m) => Math.abs(share - 1 + wanted[m] / normals.global_kWhm2day[m])))
 }
 
 interface Station {
@@ -275,7 +299,8 @@ const SEASONS = [
 function compared(inputs: EvidenceInputs, station: Station, measured: ClimateYear): Check[] {
   const own = normalsOf(measured)
   const place = parseNormals(inputs.data('climates/normals.json')).find(({ id }) => id === station.builtIn)
-  const normals = place?.normals ?? own
+  // the beam model alone, without the known diffuse radiation
+  const normals = { ...(place?.normals ?? own), diffuse_kWhm2day: undefined }
   const real = yearStatistics(measured)
   const generated = generateYear(normals, BUILT_IN_SEED)
   const made = yearStatistics(generated)

@@ -32,7 +32,8 @@ export function generateYear(normals: MonthlyNormals, seed: number): ClimateYear
   const wind_ms = generateWind(normals, seeded(seed * 8 + 4))
   const pressure_Pa = generatePressure(normals, seeded(seed * 8 + 5))
   const cloud = hourlyCloud(global_Wm2, sun.outside_Wm2)
-  const estimated = ['hours and single days', 'beam share', 'sky temperature', ...normals.estimated]
+  const shares = normals.diffuse_kWhm2day === undefined ? ['beam share'] : []
+  const estimated = ['hours and single days', ...shares, 'sky temperature', ...normals.estimated]
   return {
     place,
     source: `Generated from monthly normals (${normals.source}), seed ${seed}; estimated: ${estimated.join(', ')}`,

@@ -15,6 +15,8 @@ export interface MonthlyNormals {
   readonly lowest_C: readonly number[]
   /** Global horizontal radiation [kWh/(m² day)]. */
   readonly global_kWhm2day: readonly number[]
+  /** Diffuse horizontal radiation, where it is known [kWh/(m² day)]; the beam model decides otherwise. */
+  readonly diffuse_kWhm2day?: readonly number[]
   readonly dewPoint_C: readonly number[]
   /** At 10 m above ground [m/s]. */
   readonly wind_ms: readonly number[]
@@ -49,6 +51,12 @@ export function checkNormals(normals: MonthlyNormals): void {
       throw new RangeError(`${name}[${month}] must be between ${low} and ${high}, got ${value}`)
     })
   }
+  normals.diffuse_kWhm2day?.forEach((value, month) => {
+    if (value >= 0 && value <= normals.global_kWhm2day[month]) return
+    throw new RangeError(
+      `diffuse_kWhm2day[${month}] must be between 0 and the global radiation, got ${value}`,
+    )
+  })
   for (let month = 0; month < 12; month++) {
     const { lowest_C, mean_C, highest_C } = normals
     if (lowest_C[month] < mean_C[month] && mean_C[month] < highest_C[month]) continue

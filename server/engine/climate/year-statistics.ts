@@ -45,7 +45,7 @@ export function yearStatistics(year: ClimateYear): YearStatistics {
   }
 }
 
-/** Monthly normals of a year, with the spread of its days. */
+/** Monthly normals of a year, with its diffuse radiation and the spread of its days. */
 export function normalsOf(year: ClimateYear): MonthlyNormals {
   const months = (daily: Float64Array): number[] => Array.from(monthMeans(daily))
   return {
@@ -56,6 +56,7 @@ export function normalsOf(year: ClimateYear): MonthlyNormals {
     highest_C: months(dailyHighest(year.outdoor_C)),
     lowest_C: months(dailyLowest(year.outdoor_C)),
     global_kWhm2day: months(dailyMeans(year.global_Wm2)).map((value_Wm2) => value_Wm2 * 0.024),
+    diffuse_kWhm2day: months(dailyMeans(year.diffuse_Wm2)).map((value_Wm2) => value_Wm2 * 0.024),
     dewPoint_C: months(dailyMeans(year.dewPoint_C)),
     wind_ms: months(dailyMeans(year.wind_ms)),
     pressure_Pa: months(dailyMeans(year.pressure_Pa)),
