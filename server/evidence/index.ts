@@ -1,9 +1,4 @@
 import type { CheckGroup } from './check.ts'
-import { soilWaveChecks } from './soil-waves.checks.ts'
 import { measuredSoilChecks } from './measured-soil.checks.ts'
 
 /** Every topic of the evidence, in the order in which it is shown. */
-export const evidenceGroups: readonly CheckGroup[] = [
-  soilWaveChecks,
-  measuredSoilChecks,
-]
