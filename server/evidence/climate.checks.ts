@@ -272,7 +272,11 @@ function beamShareDeviation(normals: MonthlyNormals, year: ClimateYear): number 
   const wanted = normals.diffuse_kWhm2day
   if (wanted === undefined) return 0
   const shares = yearStatistics(year).monthBeamShares
-  return Math.max(...shares.map((share, m) => Math.abs(share - 1 + wanted[m] / normals.global_kWhm2day[m])))
+  return Math.max(
+    ...shares.map((share, m) =>
+      normals.global_kWhm2day[m] < 0.5 ? 0 : Math.abs(share - 1 + wanted[m] / normals.global_kWhm2day[m]),
+    ),
+  )
 }
 
 interface Station {
