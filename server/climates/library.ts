@@ -51,6 +51,8 @@ function plain(name: string): string {
   return name
     .normalize('NFD')
     .toLowerCase()
+    .replaceAll('ø', 'o')
+    .replaceAll('ı', 'i')
     .replace(/[^a-z]/g, '')
 }
 

@@ -35,7 +35,7 @@ test('a built-in climate is found by id, place or full name, in any letter case'
   for (const name of ['TAOS', 'Taos, New Mexico, USA']) {
     expect((await loadClimate(name)).outdoor_C).toEqual(year.outdoor_C)
   }
-  for (const name of ['La Quiaca', "Yan'an", 'nevsehir', 'Nevşehir', 'Addis Ababa', 'Tromsö']) {
+  for (const name of ['La Quiaca', "Yan'an", 'nevsehir', 'Nevşehir', 'Addis Ababa', 'Tromsø']) {
     expect((await loadClimate(name)).source).toMatch(/^Generated/)
   }
 })
@@ -74,6 +74,14 @@ test('a file that is missing, a folder, of another kind, broken or empty gives o
   await fails(
     await file('cut.csv.gz', gzipSync(tmy3Lines().join('\n')).subarray(0, 5000)),
     /not a whole gzip/,
+  )
+})
+
+test('a file of ten years of hours is refused by its number of lines', async () => {
+  const lines = hourlyLines()
+  const years = [...lines, ...Array.from({ length: 9 }, () => lines.slice(7)).flat()]
+  await expect(loadClimate(await file('years.csv', years.join('\n')))).rejects.toThrow(
+    /has 87607 lines.*Keep one year/,
   )
 })
 
