@@ -9,7 +9,7 @@ export interface DeepSoil {
   readonly month: Uint8Array
   /** By depth [°C]. */
   readonly soil_C: readonly Float64Array[]
-  /** Hours that were missing or not a number at some depth, filled straight between their neighbours. */
+  /** Hours that were missing, not a number or a spike at some depth, filled straight between their neighbours. */
   readonly filled: number
 }
 
@@ -17,7 +17,7 @@ const HOUR_MS = 3_600_000
 
 /**
  * Reads hourly soil temperatures: a column `time_cst` (month/day/year hour:minute) and columns `T5cm` …
- * Missing hours are filled straight between their neighbours, depth by depth.
+ * Missing hours and spikes are filled straight between their neighbours, depth by depth.
  *
  * @throws RangeError for a time that cannot be read or a depth without any value
  */
@@ -41,6 +41,7 @@ export function readDeepSoil(text: string): DeepSoil {
       if (Number.isFinite(value)) raw[depth][hour] = value
     })
   })
+  for (const series of raw) dropSpikes(series)
   let filled = 0
   for (let hour = 0; hour < hours; hour++) if (raw.some((series) => Number.isNaN(series[hour]))) filled++
   return {
@@ -57,6 +58,12 @@ export function readDeepSoil(text: string): DeepSoil {
     }),
     filled,
   }
+}
+
+/** A single hour more than 10 K above both its neighbours is a fault of the logger, not soil: it becomes NaN. */
+function dropSpikes(series: Float64Array): void {
+  for (let hour = 1; hour < series.length - 1; hour++)
+    if (series[hour] - series[hour - 1] > 10 && series[hour] - series[hour + 1] > 10) series[hour] = NaN
 }
 
 /** Standard time without summer time, so it may be read as if it were universal time. */
