@@ -33,7 +33,10 @@ export default tseslint.config(
   {
     // The contract knows nobody.
     files: ['server/contract/**'],
-    rules: arrows('^(?!\\./|\\.\\./(?!\\.\\./)|zod$|#contract/)', 'The contract imports only zod and itself.'),
+    rules: arrows(
+      '^(?!\\./|\\.\\./(?!\\.\\./)|zod$|#contract/)',
+      'The contract imports only zod and itself.',
+    ),
   },
   {
     // Modelling translates between contract and engine and stays pure.

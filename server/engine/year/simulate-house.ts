@@ -1,4 +1,5 @@
 import type { ClimateYear } from '../climate/climate-year.ts'
+import type { SunYear } from '../solar/sun.ts'
 import { assemble, type RunningHouse } from '../zone/assemble.ts'
 import type { ElementCache } from '../zone/element-cache.ts'
 import type { HouseModel } from '../zone/house-model.ts'
@@ -9,6 +10,8 @@ import type { YearTrace } from './year-trace.ts'
 export interface SimulateOptions {
   /** Reduced elements to share with other runs. */
   readonly cache?: ElementCache
+  /** Where the sun stands through the year, when it is known from an earlier run at the same place. */
+  readonly sun?: SunYear
   /** Also live the first years after building. */
   readonly charging?: { readonly month: number; readonly years: number } | null
   /** Keep the ground sections' modes for every hour, for pictures of the temperature field. */
@@ -33,8 +36,8 @@ export function simulateHouse(
   climate: ClimateYear,
   options: SimulateOptions = {},
 ): SimulatedHouse {
-  const { cache = new Map(), charging = null, keepStates = false } = options
-  const house = assemble(model, climate, cache)
+  const { cache = new Map(), sun, charging = null, keepStates = false } = options
+  const house = assemble(model, climate, cache, sun)
   const years = charging ? chargingYears(house, cache, { ...charging, keepStates }) : []
   return { house, cache, repeating: repeatingYear(house, { keepStates }), charging: years }
 }

@@ -2,6 +2,7 @@ import { HOURS, HOUR_S, type ClimateYear } from '../climate/climate-year.ts'
 import { hourStep } from '../conduction/hour-step.ts'
 import type { ReducedElement } from '../conduction/thermal-system.ts'
 import { AIR_HEAT_JKGK, airDensity } from './air.ts'
+import type { SunYear } from '../solar/sun.ts'
 import type { Driven } from './driven.ts'
 import type { HouseElement, HouseModel, RoomSurface } from './house-model.ts'
 import { outdoorDrives, type Drives } from './drives.ts'
@@ -86,14 +87,16 @@ export interface RunningHouse {
  *
  * @param cache reduced elements by their spec; hand the same one in again when only windows, air or
  *   habits changed, and nothing is reduced twice
+ * @param sun where the sun stands through the year; computed for the climate's place when left out
  * @throws RangeError with the name of the element or window and what is wrong with it
  */
 export function assemble(
   model: HouseModel,
   climate: ClimateYear,
   cache: ElementCache = new Map(),
+  sun?: SunYear,
 ): RunningHouse {
-  const drives = outdoorDrives(model, climate)
+  const drives = outdoorDrives(model, climate, sun)
   const faces: RoomFace[] = []
   const elements = model.elements.map((element, index) => {
     const reduced = reduceElement(element, cache)

@@ -12,8 +12,12 @@ export interface Drives {
   readonly shaded: (exposure: Exposure) => Driven
 }
 
-export function outdoorDrives(model: HouseModel, climate: ClimateYear): Drives {
-  const sun = sunOfYear(climate.place)
+/** @param sun the sun over the site; by default where it really stands */
+export function outdoorDrives(
+  model: HouseModel,
+  climate: ClimateYear,
+  sun: SunYear = sunOfYear(climate.place),
+): Drives {
   const planes = new Map<string, PlaneSun>()
   const driven = new Map<string, Driven>()
   const once = <T>(store: Map<string, T>, key: string, make: () => T): T => {
