@@ -46,14 +46,18 @@ export interface CarryOver {
   readonly day_kWh: number[]
   readonly stores: HeldHeat[]
   readonly faces: FaceExchange[]
-  /** Through the faces of ground and interior mass, over the year. */
+  /** Through the faces of ground and interior mass, over the year, warm and cold spells included. */
   readonly putIn_kWh: number
   readonly cameBack_kWh: number
+  /** Net through the same faces from the trough to the peak, into them. */
+  readonly charged_kWh: number
+  /** Net through the same faces from the peak to the trough, out of them; negative where the room fed the ground all winter. */
+  readonly returned_kWh: number
   /** From ground and interior mass to the outdoors and the deep ground, over the year: put in, not come back, and not kept. */
   readonly leaked_kWh: number
   /** What ground and interior mass hold more at the year's end than at its start; nothing in the repeating year. */
   readonly kept_kWh: number
-  readonly firewood: { readonly held: Firewood; readonly cameBack: Firewood }
+  readonly firewood: { readonly held: Firewood; readonly cameBack: Firewood; readonly returned: Firewood }
 }
 
 export interface CarryOverSettings {
@@ -97,6 +101,8 @@ export function carryOver(trace: YearTrace, settings: CarryOverSettings): CarryO
   const counted = faces.filter((face) => counts(face.element))
   const putIn_kWh = sum(counted.map((face) => sum(face.putIn_kWh)))
   const cameBack_kWh = sum(counted.map((face) => sum(face.cameBack_kWh)))
+  const charged_kWh = sum(counted.map((face) => face.charging_kWh))
+  const returned_kWh = 0 - sum(counted.map((face) => face.returning_kWh))
   const held_kWh = (total[peak] - total[trough]) / J_PER_KWH
   let leaked_J = 0
   let kept_J = 0
@@ -128,9 +134,15 @@ export function carryOver(trace: YearTrace, settings: CarryOverSettings): CarryO
     faces,
     putIn_kWh,
     cameBack_kWh,
+    charged_kWh,
+    returned_kWh,
     leaked_kWh: leaked_J / J_PER_KWH,
     kept_kWh: kept_J / J_PER_KWH,
-    firewood: { held: wood(held_kWh), cameBack: wood(cameBack_kWh) },
+    firewood: {
+      held: wood(held_kWh),
+      cameBack: wood(cameBack_kWh),
+      returned: wood(Math.max(0, returned_kWh)),
+    },
   }
 }
 

@@ -2,7 +2,7 @@ import { HOURS, type ClimateYear } from '../climate/climate-year.ts'
 import type { YearTrace } from '../year/year-trace.ts'
 import { indoorVapour, type VapourSources } from './indoor-vapour.ts'
 import { dewPointIso13788, saturationPressureIso13788, vapourPressureOfDewPoint } from './moist-air.ts'
-import { MONTH_OF_HOUR, monthlyMeans, sum } from './months.ts'
+import { MONTH_OF_HOUR, monthlyMeans } from './months.ts'
 
 /** Monthly mean humidity at a surface above which mould may grow (ISO 13788, 5.2). */
 export const MOULD_HUMIDITY = 0.8
@@ -59,6 +59,8 @@ export interface DampMeasures {
   }
   readonly outdoorDewPoint_C: number[]
   readonly surfaces: DampSurface[]
+  /** Months (1 to 12) in which some face misses its criterion, with the names of those faces. */
+  readonly flagged: { readonly month: number; readonly closed: string[]; readonly aired: string[] }[]
   /** The opaque face and month nearest to, or furthest beyond, the limit. */
   readonly worst: {
     readonly surface: string
@@ -145,6 +147,7 @@ export function damp(
     },
     outdoorDewPoint_C: monthlyMeans(climate.dewPoint_C),
     surfaces,
+    flagged: flaggedMonths(surfaces),
     worst: worstOf(surfaces),
   }
 }
@@ -184,10 +187,10 @@ function worstOf(surfaces: readonly DampSurface[]): DampMeasures['worst'] {
   return worst
 }
 
-/** Hours of the year in which any of some surfaces condenses, by state; for a sentence. */
-export function condensationHours(surface: DampSurface): {
-  readonly closed_h: number
-  readonly aired_h: number
-} {
-  return { closed_h: sum(surface.closed.condensation_h), aired_h: sum(surface.aired.condensation_h) }
+function flaggedMonths(surfaces: readonly DampSurface[]): DampMeasures['flagged'] {
+  return Array.from({ length: 12 }, (_, m) => {
+    const names = (when: 'flaggedClosed' | 'flaggedAired') =>
+      surfaces.filter((surface) => surface[when].includes(m + 1)).map((surface) => surface.name)
+    return { month: m + 1, closed: names('flaggedClosed'), aired: names('flaggedAired') }
+  }).filter(({ closed, aired }) => closed.length + aired.length > 0)
 }

@@ -59,6 +59,8 @@ test('put in = came back + leaked + kept', () => {
   )!
   expect(found.leaked_kWh).toBeGreaterThan(600)
   expect(found.putIn_kWh - found.cameBack_kWh).toBeCloseTo(found.leaked_kWh + found.kept_kWh, 6)
+  expect(found.charged_kWh - found.returned_kWh).toBeCloseTo(found.leaked_kWh + found.kept_kWh, 6)
+  expect(found.returned_kWh).toBeLessThan(found.cameBack_kWh) // the room also feeds the leak in winter
 })
 
 test('heat probes of a section count per metre times its length, and stand in for the whole section', () => {
@@ -111,6 +113,15 @@ test('a trough after the peak of the calendar year still splits the year into ch
   const found = carryOver(makeTrace({ elements: [element], surfaces: [makeSurface({ flow_W })] }), settings)!
   expect(found.peak.month).toBe(3)
   expect(found.faces[0].charging_kWh).toBeCloseTo(1200, 0)
+})
+
+test('a ground that the room feeds all winter returned nothing, and no wood is credited for it', () => {
+  const { element } = wavingGround(600, 258.5)
+  const fed = makeSurface({ flow_W: series(200) })
+  const found = carryOver(makeTrace({ elements: [element], surfaces: [fed] }), settings)!
+  expect(found.returned_kWh).toBeLessThan(-500)
+  expect(found.firewood.returned.mass_kg).toBe(0)
+  expect(found.cameBack_kWh).toBe(0)
 })
 
 test('a house of thin shells alone has no carry-over', () => {

@@ -84,6 +84,7 @@ test('a humid summer sweats on a 16 °C floor when aired, in July and not in Jan
   expect(ceiling.aired.humidity[6]).toBeCloseTo(2337 / 3165.9, 3)
   expect(ceiling.flaggedAired).toEqual([])
   expect(found.worst).toMatchObject({ surface: 'floor', month: 7 })
+  expect(found.flagged).toContainEqual(expect.objectContaining({ month: 7, aired: ['floor'] }))
   expect(floor.fRsi[6]).toBeNull()
   expect(floor.fRsi[0]).toBeCloseTo(16 / 20, 9)
 })

@@ -75,6 +75,12 @@ test('the year reaches √365 times as deep as the day in endless soil', () => {
   expect(found.year.depth90_m / found.day.depth90_m).toBeCloseTo(Math.sqrt(365), 0)
 })
 
+test('90 % of the day in endless adobe lie within 1.102 penetration depths, where |1 - exp(-(1 + i) x)| = 0.9', () => {
+  const found = massDepth('adobe', 'adobe', [{ ...adobe, thickness_m: 2 }], { kind: 'endless' }, 2)
+  expect(found.day.depth90_m).toBeCloseTo(1.102 * penetrationDepth(adobe, DAY_S), 2)
+  expect(Math.abs(found.day.depth90_m - 0.112)).toBeLessThan(0.0011) // steps of 1 mm
+})
+
 test('common practice: about the first 100 mm of an adobe wall serve the day, the soil behind serves the year', () => {
   const wall = massDepths(makeModel()).find(({ name }) => name === 'ground: wall')!
   expect(wall.day.depth90_m).toBeGreaterThan(0.08)
