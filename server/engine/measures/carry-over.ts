@@ -76,6 +76,8 @@ export interface CarryOverSettings {
  * Held heat is the daily mean. For a section it is what its heat probes say (`heat:…`, J per metre of
  * length, parts that do not overlap: the ground near the house and not the far field), or the whole
  * section where there are none; for layers and water it is all that they store.
+ * Soil near the surface warms in summer without any help of the house, and that is in the held heat
+ * too: what the house had of it is `returned_kWh`, the net through its faces from peak to trough.
  *
  * @returns null for a house that has neither ground sections nor interior mass
  * @throws RangeError for a section with heat probes whose length is not given
