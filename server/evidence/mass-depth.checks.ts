@@ -72,7 +72,7 @@ function practice(): Check[] {
       weight: 'soft',
     }),
     check({
-      id: 'TRD-20/cord',
+      id: 'MAS-02/cord',
       title: 'Dry hardwood that gives 2,000 kWh in a stove of 65 %, at 24 million Btu a cord',
       source: 'extension tables of firewood; stove efficiency as usually taken',
       provenance: 'common practice',
