@@ -42,6 +42,7 @@ export const libraryMaterial = z.strictObject({
     'stone',
     'sheet',
     'water and ice',
+    'soil',
     'test',
   ]),
   conductivity_WmK: range(conductivity),
