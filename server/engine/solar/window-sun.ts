@@ -1,0 +1,69 @@
+import { HOURS, type ClimateYear } from '../climate/climate-year.ts'
+import type { WindowModel } from '../zone/house-model.ts'
+import { planeIrradiance, type PlaneIrradiance } from './plane.ts'
+import { skyShare, sunlitShare } from './shading.ts'
+import type { SunYear } from './sun.ts'
+
+const RAD = Math.PI / 180
+const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31]
+
+/** Sun through the glass of one window, by hour [W]. */
+export interface WindowSun {
+  readonly transmittedBeam_W: Float64Array
+  readonly transmittedDiffuse_W: Float64Array
+  /** Absorbed in the glass and flowing into the room. */
+  readonly inward_W: Float64Array
+  /** Share of the transmitted beam that lands on the floor, not on the wall across. */
+  readonly floorShare: Float64Array
+}
+
+/** Value at an angle of incidence, between the ten given ones [deg]. */
+export function atIncidence(values: readonly number[], incidence_deg: number): number {
+  const place = Math.min(Math.max(incidence_deg, 0), 90) / 10
+  const i = Math.min(8, Math.floor(place))
+  return values[i] + (place - i) * (values[i + 1] - values[i])
+}
+
+export function windowSun(
+  climate: ClimateYear,
+  sun: SunYear,
+  window: WindowModel,
+  groundReflectance: readonly number[],
+  horizon_deg: readonly number[],
+  roomDepth_m: number,
+  plane: PlaneIrradiance = planeIrradiance(climate, sun, window.exposure, groundReflectance, horizon_deg),
+): WindowSun {
+  const out = {
+    transmittedBeam_W: new Float64Array(HOURS),
+    transmittedDiffuse_W: new Float64Array(HOURS),
+    inward_W: new Float64Array(HOURS),
+    floorShare: new Float64Array(HOURS),
+  }
+  const { glazing, exposure } = window
+  const glass_m2 = window.area_m2 * (1 - window.frameShare)
+  const sky = skyShare(window)
+  let hour = 0
+  for (let month = 0; month < 12; month++) {
+    const passes = window.shade?.months.includes(month + 1) ? window.shade.passes : 1
+    for (const end = hour + 24 * MONTH_DAYS[month]; hour < end; hour++) {
+      const diffuse_W = (plane.sky_Wm2[hour] * sky + plane.ground_Wm2[hour]) * glass_m2 * passes
+      out.transmittedDiffuse_W[hour] = diffuse_W * glazing.diffuseTransmittance
+      out.inward_W[hour] = diffuse_W * (glazing.diffuseSolarFactor - glazing.diffuseTransmittance)
+      const beam = plane.beam_Wm2[hour]
+      if (beam <= 0) continue
+      const cosine = plane.incidence[hour]
+      const incidence_deg = Math.acos(Math.min(1, cosine)) / RAD
+      const side_deg = ((sun.azimuth_deg[hour] - exposure.faces_deg + 540) % 360) - 180
+      const profile = Math.atan2(Math.tan(sun.altitude_deg[hour] * RAD), Math.cos(side_deg * RAD))
+      const lit = exposure.tilt_deg > 60 ? sunlitShare(window, profile / RAD, side_deg) : 1
+      const beam_W = beam * glass_m2 * passes * lit
+      const transmittance = atIncidence(glazing.transmittance, incidence_deg)
+      out.transmittedBeam_W[hour] = beam_W * transmittance
+      out.inward_W[hour] += beam_W * (atIncidence(glazing.solarFactor, incidence_deg) - transmittance)
+      // Rays that reach the floor before the wall across come through below this height above the floor.
+      const reach = roomDepth_m * Math.tan(profile)
+      out.floorShare[hour] = Math.min(1, Math.max(0, (reach - window.sill_m) / window.height_m))
+    }
+  }
+  return out
+}
