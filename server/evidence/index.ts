@@ -1,5 +1,17 @@
+import { calibrationChecks } from './calibration.checks.ts'
 import type { CheckGroup } from './check.ts'
+import { climateChecks } from './climate.checks.ts'
+import { comfortChecks } from './comfort.checks.ts'
+import { massDepthChecks } from './mass-depth.checks.ts'
 import { measuredSoilChecks } from './measured-soil.checks.ts'
+import { moistAirChecks } from './moist-air.checks.ts'
 
 /** Every topic of the evidence, in the order in which it is shown. */
-export const evidenceGroups: readonly CheckGroup[] = [measuredSoilChecks]
+export const evidenceGroups: readonly CheckGroup[] = [
+  ...climateChecks,
+  measuredSoilChecks,
+  massDepthChecks,
+  comfortChecks,
+  moistAirChecks,
+  calibrationChecks,
+]
