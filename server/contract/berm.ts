@@ -7,7 +7,7 @@ export const berm = z.strictObject({
   /** Crest above the level ground outside. */
   height_m: length,
   /** Level top, from the wall's outer face outwards. */
-  crest_m: distance,
+  crest_m: length.min(0.1),
   /** Horizontal run for each metre of rise; steeper than 1 to 1 does not stay. */
   runPerRise: z.number().min(0.5).max(20),
   /** The soil it is made of; by default that of the site. */

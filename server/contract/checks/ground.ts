@@ -98,6 +98,11 @@ function underground(side: Side, floorUnderside_m: number, tell: Report): void {
     )
   if (!skirt) return
   const soil_m = berm?.height_m ?? 0
+  if (berm && skirt.thickness_m >= berm.crest_m)
+    tell(
+      ['skirt', 'thickness_m'],
+      `The skirt is ${skirt.thickness_m} m thick, the berm's crest only ${berm.crest_m} m wide. Make it thinner.`,
+    )
   if (skirt.bottom_m >= skirt.top_m - 0.05)
     tell(
       ['skirt', 'bottom_m'],

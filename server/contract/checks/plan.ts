@@ -5,6 +5,10 @@ import type { Report } from './check-option.ts'
 /** Sides enclose the floor; room and roof suit them. */
 export function checkPlan(option: Option, report: Report): void {
   const { room, roof, sides } = option
+  sides.forEach(({ name }, i) => {
+    if (sides.findIndex((side) => side.name === name) < i)
+      report(['sides', i, 'name'], `"${name}" is given twice; choose another name.`)
+  })
   const plan = planOf(sides)
   if (plan.gap_m > 0.02 * plan.perimeter_m + 0.05) {
     report(
