@@ -5,6 +5,7 @@ import { comfortChecks } from './comfort.checks.ts'
 import { massDepthChecks } from './mass-depth.checks.ts'
 import { measuredSoilChecks } from './measured-soil.checks.ts'
 import { moistAirChecks } from './moist-air.checks.ts'
+import { networkChecks } from './network.checks.ts'
 
 /** Every topic of the evidence, in the order in which it is shown. */
 export const evidenceGroups: readonly CheckGroup[] = [
@@ -14,4 +15,5 @@ export const evidenceGroups: readonly CheckGroup[] = [
   comfortChecks,
   moistAirChecks,
   calibrationChecks,
+  networkChecks,
 ]
