@@ -6,19 +6,25 @@ import type { HouseModel } from '#engine/zone/house-model.ts'
 import { vapour } from './habits.ts'
 
 const BTU_MJ = 1055.06e-6
-const LIMITS = { below_C: [10, 15, 18], above_C: [26, 28, 30] }
+/** Beside the limits of the comfort range, which come first [°C]. */
+const BELOW_C = [10, 15, 18]
+const ABOVE_C = [26, 28, 30]
 
 /** What the measures of a year want to know of an option. */
 export function measureSettings(option: Option, library: Library, model: HouseModel): MeasureSettings {
   const { use, comfort } = option
   return {
     model,
-    people: use.people,
+    // An empty test cell is measured as if one person looked in; its sentences leave people out.
+    people: use.people > 0 ? use.people : 1,
     bedrooms: use.bedrooms,
     vapour_kgh: vapour(option),
     vapourBuffer: use.vapourBuffer,
     comfort,
-    limits: LIMITS,
+    limits: {
+      below_C: [comfort.low_C, ...BELOW_C.filter((limit) => limit !== comfort.low_C)],
+      above_C: [comfort.high_C, ...ABOVE_C.filter((limit) => limit !== comfort.high_C)],
+    },
     fuel: fuelOf(library, use.wood),
     stoveEfficiency: library.stoves.get(use.stove)!.efficiency.typical,
     repeats: true,
