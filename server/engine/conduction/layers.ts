@@ -4,18 +4,27 @@ import type { Boundary, Probe, ThermalSystem } from './thermal-system.ts'
 
 const DAY_S = 86400
 
+/** Cell size per distance from the nearest exposed face: slower waves, which are longer, reach further. */
+const GROWTH = 0.15
+
 export interface LayersOptions {
   /** 1 is the usual grid; 2 halves every cell. */
   readonly refinement?: number
-  /** Temperatures to follow, by depth from the inner face [m]. */
-  readonly probes?: readonly { readonly name: string; readonly depth_m: number }[]
+  /** Temperatures to follow. */
+  readonly probes?: readonly DepthProbe[]
+}
+
+/** A place behind the inner face [m]. */
+export interface DepthProbe {
+  readonly name: string
+  readonly depth_m: number
 }
 
 /**
  * Plane layers as a chain of nodes for 1 m². Nodes stand at the faces of cells, so the outermost ones
  * are the surfaces themselves; a cell gives half of its capacity to each of its two nodes (linear
- * elements with lumped capacity). Cells grow by 1.3 from both faces inwards, from a sixteenth of the
- * depth that a daily wave reaches up to a quarter of the depth that a ten-day wave reaches.
+ * elements with lumped capacity). Cells grow from both exposed faces inwards, from a sixteenth of the depth
+ * that a daily wave reaches; a light layer gets few, a massless one a single cell.
  *
  * Boundary groups: `outside` (left out when its film is 0) and `inside`. Node 0 is the outer face.
  *
@@ -44,7 +53,7 @@ export function layersSystem(spec: LayersSpec, options: LayersOptions = {}): The
   }
   film('outside', 0, spec.outsideFilm_Wm2K)
   film('inside', nodes - 1, spec.insideFilm_Wm2K)
-  return { capacity_JK, conductance_WK, boundaries, probes: depthProbes(cells, options.probes ?? []) }
+  return { capacity_JK, conductance_WK, boundaries, probes: layerProbes(cells, options.probes ?? []) }
 }
 
 function check(spec: LayersSpec): void {
@@ -69,12 +78,11 @@ export function layerCells(layers: readonly Layer[], refinement: number, isOutsi
     const start_m = above_m
     const daily_m = waveDepth(layer, DAY_S)
     const least_m = daily_m / 16
-    const most_m = waveDepth(layer, 10 * DAY_S) / 4
     // Wanted size at a place: small near the exposed faces, growing with the distance to them.
     const wanted = (at_m: number) => {
       const inner_m = total_m - at_m
       const outer_m = isOutsideExposed ? at_m : Infinity
-      return Math.min(most_m, least_m + 0.26 * Math.max(0, Math.min(inner_m, outer_m))) / refinement
+      return (least_m + GROWTH * Math.max(0, Math.min(inner_m, outer_m))) / refinement
     }
     // As many cells as the integral of 1/size asks for, each of equal share of that integral.
     const steps = 200
@@ -104,7 +112,13 @@ function waveDepth(layer: Layer, period_s: number): number {
   return Math.sqrt((layer.conductivity_WmK * period_s) / (Math.PI * layer.volumetricHeat_Jm3K))
 }
 
-function depthProbes(cells: readonly Layer[], wanted: NonNullable<LayersOptions['probes']>): Probe[] {
+/**
+ * Temperatures at depths from the inner face, linear between nodes.
+ *
+ * @param cells of the system, from outside to inside, as layerCells gives them
+ * @throws RangeError for a depth outside the layers
+ */
+export function layerProbes(cells: readonly Layer[], wanted: readonly DepthProbe[]): Probe[] {
   const total_m = cells.reduce((sum, cell) => sum + cell.thickness_m, 0)
   return wanted.map(({ name, depth_m }) => {
     if (!(depth_m >= 0 && depth_m <= total_m * (1 + 1e-12)))
