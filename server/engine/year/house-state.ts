@@ -27,6 +27,7 @@ export function setHouseState(house: RunningHouse, state: Float64Array): void {
 /** Every element and the room air at one temperature [°C]. */
 export function setUniform(element: RunningElement, temperature_C: number): void {
   const { content } = element.reduced
+  element.full?.stepper.setUniform(temperature_C)
   for (let k = 0; k < element.modes; k++) element.state[k] = content[k] * temperature_C
 }
 

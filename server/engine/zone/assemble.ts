@@ -1,4 +1,5 @@
 import { HOURS, HOUR_S, type ClimateYear } from '../climate/climate-year.ts'
+import { fullStepper, type FullRunOptions, type SteppedElement } from '../conduction/full-run.ts'
 import { hourStep } from '../conduction/hour-step.ts'
 import type { ReducedElement } from '../conduction/thermal-system.ts'
 import { AIR_HEAT_JKGK, airDensity } from './air.ts'
@@ -6,7 +7,7 @@ import type { SunYear } from '../solar/sun.ts'
 import type { Driven } from './driven.ts'
 import type { HouseElement, HouseModel, RoomSurface } from './house-model.ts'
 import { outdoorDrives, type Drives } from './drives.ts'
-import { reduceElement, type ElementCache } from './element-cache.ts'
+import { cachedElement, type ElementCache } from './element-cache.ts'
 import { windowSeries, type WindowSeries } from './window-series.ts'
 import { monthOfHour } from './calendar.ts'
 
@@ -56,6 +57,8 @@ export interface RunningElement {
   readonly room: readonly { readonly face: number; readonly group: number; readonly column: number }[]
   readonly outdoor: readonly { readonly group: number; readonly column: number; readonly drive: Driven }[]
   readonly constant: readonly { readonly group: number; readonly column: number }[]
+  /** All nodes stepped in time instead of the modes, for comparisons; null in every usual run. */
+  readonly full: { readonly stepper: SteppedElement; readonly history_W: Float64Array } | null
 }
 
 /** Everything the hour loop needs, allocated and checked once. */
@@ -87,6 +90,7 @@ export interface RunningHouse {
  *
  * @param cache reduced elements by their spec; hand the same one in again when only windows, air or
  *   habits changed, and nothing is reduced twice
+ * @param full steps all nodes of every element in time instead of its modes, to measure what the modes cost
  * @param sun where the sun stands through the year; computed for the climate's place when left out
  * @throws RangeError with the name of the element or window and what is wrong with it
  */
@@ -95,12 +99,14 @@ export function assemble(
   climate: ClimateYear,
   cache: ElementCache = new Map(),
   sun?: SunYear,
+  full: FullRunOptions | null = null,
 ): RunningHouse {
   const drives = outdoorDrives(model, climate, sun)
   const faces: RoomFace[] = []
   const elements = model.elements.map((element, index) => {
-    const reduced = reduceElement(element, cache)
-    return runningElement(element, index, reduced, drives, faces)
+    const cached = cachedElement(element.spec, element.name, cache)
+    const stepper = full ? fullStepper(cached.system, full) : null
+    return runningElement(element, index, cached.reduced, stepper, drives, faces)
   })
   if (faces.length === 0) throw new RangeError('The room has no surface.')
   const windows = windowSeries(model, climate, drives, faces)
@@ -137,6 +143,7 @@ function runningElement(
   element: HouseElement,
   index: number,
   reduced: ReducedElement,
+  stepper: SteppedElement | null,
   drives: Drives,
   faces: RoomFace[],
 ): RunningElement {
@@ -182,6 +189,7 @@ function runningElement(
   const gain = new Float64Array(modes * columns)
   const response = new Float64Array(groups * columns)
   const history = new Float64Array(groups * modes)
+  const { response0, response1 } = stepper ?? step
   const fill = (group: number, column: number, start: number, end: number) => {
     for (let k = 0; k < modes; k++) {
       const at = k * groups + group
@@ -189,7 +197,7 @@ function runningElement(
     }
     for (let g = 0; g < groups; g++) {
       const at = g * groups + group
-      response[g * columns + column] += size * (start * step.response0[at] + end * step.response1[at])
+      response[g * columns + column] += size * (start * response0[at] + end * response1[at])
     }
   }
   for (const { group, column } of room) fill(group, column, 1, 1)
@@ -219,6 +227,7 @@ function runningElement(
     room,
     outdoor,
     constant,
+    full: stepper && { stepper, history_W: new Float64Array(groups) },
   }
 }
 

@@ -5,7 +5,6 @@ import { sectionSystem, type SectionMesh } from '../conduction/section.ts'
 import { undisturbedField } from '../conduction/field.ts'
 import type { ElementSpec } from '../conduction/specs.ts'
 import type { ReducedElement, ThermalSystem } from '../conduction/thermal-system.ts'
-import type { HouseElement } from './house-model.ts'
 
 /** A spec turned into a system and its modes; the mesh for sections only. */
 export interface CachedElement {
@@ -18,10 +17,6 @@ export interface CachedElement {
 export type ElementCache = Map<string, CachedElement>
 
 const QUARTER_YEAR_S = (365 * 86400) / 4
-
-export function reduceElement(element: HouseElement, cache: ElementCache): ReducedElement {
-  return cachedElement(element.spec, element.name, cache).reduced
-}
 
 /**
  * The system, modes and mesh of a spec, from the cache or made now.

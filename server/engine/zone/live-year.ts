@@ -1,4 +1,5 @@
 import { HOURS, HOUR_S } from '../climate/climate-year.ts'
+import type { SteppedElement } from '../conduction/full-run.ts'
 import { leakageFlow } from './air.ts'
 import type { RunningElement, RunningHouse } from './assemble.ts'
 import { hourWithin } from './calendar.ts'
@@ -56,6 +57,7 @@ export function liveYear(
     for (let e = 0; e < elements.length; e++) {
       const element = elements[e]
       drive(element, hour, before)
+      if (element.full) element.full.stepper.startHour(element.full.history_W)
       const room = element.room
       for (let r = 0; r < room.length; r++) {
         const { face, group } = room[r]
@@ -180,11 +182,19 @@ function drive(element: RunningElement, hour: number, before: number): void {
   }
 }
 
-/** Mean flow into one group from modes, outdoor and constant inputs, without the room's part [W]. */
-function knownFlow(element: RunningElement, group: number): number {
-  const { modes, state, history, response, columns, input, outdoor, constant } = element
+/** Mean flow into one group from what is stored, all inputs at 0 °C [W]. */
+export function storedFlow(element: RunningElement, group: number): number {
+  const { modes, state, history, full, size } = element
+  if (full) return full.history_W[group] * size
   let flow = 0
   for (let k = 0, at = group * modes; k < modes; k++, at++) flow -= history[at] * state[k]
+  return flow
+}
+
+/** Mean flow into one group from modes, outdoor and constant inputs, without the room's part [W]. */
+function knownFlow(element: RunningElement, group: number): number {
+  const { response, columns, input, outdoor, constant } = element
+  let flow = storedFlow(element, group)
   const row = group * columns
   for (let i = 0; i < outdoor.length; i++) {
     const column = outdoor[i].column
@@ -200,11 +210,27 @@ function knownFlow(element: RunningElement, group: number): number {
 /** One exact step of all modes. */
 function advance(element: RunningElement): void {
   const { modes, columns, state, decay, gain, input } = element
+  if (element.full) {
+    advanceFull(element, element.full.stepper)
+    return
+  }
   for (let k = 0, at = 0; k < modes; k++) {
     let next = decay[k] * state[k]
     for (let j = 0; j < columns; j++, at++) next += gain[at] * input[j]
     state[k] = next
   }
+}
+
+function advanceFull(element: RunningElement, stepper: SteppedElement): void {
+  const start = new Float64Array(stepper.groups)
+  const end = new Float64Array(stepper.groups)
+  for (const { group, column } of [...element.room, ...element.constant])
+    start[group] = end[group] = element.input[column]
+  for (const { group, column } of element.outdoor) {
+    start[group] = element.input[column]
+    end[group] = element.input[column + 1]
+  }
+  stepper.finishHour(start, end)
 }
 
 /** Whether a plant has to run: sign 1 heats below its set temperature, -1 cools above it. */

@@ -1,6 +1,7 @@
 import { HOURS } from '../climate/climate-year.ts'
 import type { ElementTrace, ProbeTrace, SurfaceTrace, YearTrace } from '../year/year-trace.ts'
 import type { RunningElement, RunningHouse } from './assemble.ts'
+import { storedFlow } from './live-year.ts'
 
 /** What the hour loop says of the room each hour; flows into the room positive [W]. */
 export interface RoomHour {
@@ -130,6 +131,7 @@ export function traceRecorder(house: RunningHouse, firstHour: number, keepStates
 
 function stored(element: RunningElement): number {
   const { content } = element.reduced
+  if (element.full) return element.full.stepper.stored_J() * element.size
   let total = 0
   for (let k = 0; k < element.modes; k++) total += content[k] * element.state[k]
   return total * element.size
@@ -137,9 +139,8 @@ function stored(element: RunningElement): number {
 
 /** Mean flow into a group of the whole element, all inputs counted [W]. */
 function wholeFlow(element: RunningElement, group: number): number {
-  const { modes, state, history, response, columns, input } = element
-  let flow = 0
-  for (let k = 0; k < modes; k++) flow -= history[group * modes + k] * state[k]
+  const { response, columns, input } = element
+  let flow = storedFlow(element, group)
   for (let j = 0; j < columns; j++) flow += response[group * columns + j] * input[j]
   return flow
 }
