@@ -1,3 +1,4 @@
+import { boxChecks } from './box.checks.ts'
 import { calibrationChecks } from './calibration.checks.ts'
 import type { CheckGroup } from './check.ts'
 import { climateChecks } from './climate.checks.ts'
@@ -16,4 +17,5 @@ export const evidenceGroups: readonly CheckGroup[] = [
   moistAirChecks,
   calibrationChecks,
   networkChecks,
+  boxChecks,
 ]
