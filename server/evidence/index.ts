@@ -7,6 +7,7 @@ import { massDepthChecks } from './mass-depth.checks.ts'
 import { measuredSoilChecks } from './measured-soil.checks.ts'
 import { moistAirChecks } from './moist-air.checks.ts'
 import { networkChecks } from './network.checks.ts'
+import { tradeChecks } from './trade.checks.ts'
 
 /** Every topic of the evidence, in the order in which it is shown. */
 export const evidenceGroups: readonly CheckGroup[] = [
@@ -18,4 +19,5 @@ export const evidenceGroups: readonly CheckGroup[] = [
   calibrationChecks,
   networkChecks,
   boxChecks,
+  tradeChecks,
 ]

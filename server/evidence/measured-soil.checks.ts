@@ -1,8 +1,11 @@
+import { loadLibrary } from '../libraries/library.ts'
 import { check, type Check, type CheckGroup } from './check.ts'
 import { readDeepSoil, type DeepSoil } from './parts/deep-soil.ts'
 import { fitColumn, runColumn, seriesError, worstError } from './parts/ground-column.ts'
 import { readSoilStations } from './parts/soil-stations.ts'
+import { daysLater, waveOfDays } from './parts/soil-wave.ts'
 import { meanSize, stationErrors, worstSize, type StationError } from './parts/station-errors.ts'
+import { waveFromWeather, weatherOfDays } from './parts/surface-balance.ts'
 
 const STATIONS = 'measured/uscrn-2020-daily-30-stations.csv.gz'
 const FARGO = 'measured/fargo-deep-soil-2014-2018.csv.gz'
@@ -15,7 +18,8 @@ export const measuredSoilChecks: CheckGroup = {
     const fargo = inputs.shared(FARGO)
     if (stations === null || fargo === null)
       return { leftOut: 'the measurements lie in the shared folder beside the project, which is not here' }
-    return [...stationChecks(stationErrors(readSoilStations(stations))), ...fargoChecks(readDeepSoil(fargo))]
+    const errors = stationErrors(readSoilStations(stations))
+    return [...stationChecks(errors), ...surfaceChecks(errors), ...fargoChecks(readDeepSoil(fargo))]
   },
 }
 
@@ -59,6 +63,85 @@ function stationRows(id: string, who: string, errors: readonly StationError[]): 
       'K',
       0.5,
       meanSize(errors.map((one) => one.mean_K)),
+    ),
+  ]
+}
+
+/** Below this much rain and snow a year the ground counts as dry grass, otherwise as green [mm]. */
+const STEPPE_MM = 400
+const SOIL = { name: 'soil', conductivity_WmK: 1, volumetricHeat_Jm3K: 2e6 }
+
+/** The wave at 5 cm from air, sun and sky alone, against the thermometers there. */
+function surfaceChecks(all: readonly StationError[]): Check[] {
+  const { covers } = loadLibrary()
+  const errors = all
+    .filter(({ station }) => station.humidity_pct !== null)
+    .map(({ station, isWarm }) => {
+      const cover = covers.get(station.rain_mm < STEPPE_MM ? 'dry_grass' : 'grass')
+      if (!cover) throw new RangeError('There is no grass among the covers.')
+      const measured = waveOfDays(station.soil_C[0])
+      const computed = waveFromWeather(weatherOfDays(station), cover, SOIL, 0.05)
+      return {
+        isWarm,
+        mean_K: computed.mean - measured.mean,
+        amplitude_K: computed.amplitude - measured.amplitude,
+        delay_d: daysLater(computed, measured),
+      }
+    })
+  const warm = errors.filter((one) => one.isWarm)
+  const frozen = errors.filter((one) => !one.isWarm)
+  const note =
+    'Daily means suffice, for the balance is linear. Covers with their typical properties: dry grass below 400 mm of rain, grass above. ' +
+    'Tolerance: the span of the share of sun that evaporates moves the mean by 1.2 K and the amplitude by 0.6 K. Green leaves shade and evaporate most in summer, which one share for all the year leaves out.'
+  const row = (name: string, title: string, unit: string, tolerance: number, computed: number) =>
+    check({
+      id: `USCRN/surface/${name}`,
+      title,
+      source: 'U.S. Climate Reference Network, daily air, sun, humidity and soil at 5 cm, 2020 (NOAA)',
+      provenance: 'looked up',
+      unit,
+      expected: 0,
+      tolerance,
+      computed,
+      weight: 'soft',
+      note,
+    })
+  const without = `${warm.length} stations without frost or snow`
+  return [
+    row(
+      'mean',
+      `Yearly mean at 5 cm from air, sun and sky: mean error, ${without}`,
+      'K',
+      1.2,
+      meanSize(warm.map((one) => one.mean_K)),
+    ),
+    row(
+      'mean-worst',
+      `Yearly mean at 5 cm from air, sun and sky: worst error, ${without}`,
+      'K',
+      2.4,
+      worstSize(warm.map((one) => one.mean_K)),
+    ),
+    row(
+      'amplitude',
+      `Amplitude of the year at 5 cm from air, sun and sky: mean error, ${without}`,
+      'K',
+      0.6,
+      meanSize(warm.map((one) => one.amplitude_K)),
+    ),
+    row(
+      'delay',
+      `Day of the coldest at 5 cm from air, sun and sky: mean error, ${without}`,
+      'd',
+      3,
+      meanSize(warm.map((one) => one.delay_d)),
+    ),
+    row(
+      'amplitude-snow',
+      `Amplitude of the year at 5 cm from air, sun and sky: mean error under snow and frost, ${frozen.length} stations`,
+      'K',
+      0.6,
+      meanSize(frozen.map((one) => one.amplitude_K)),
     ),
   ]
 }

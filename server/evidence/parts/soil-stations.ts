@@ -11,6 +11,8 @@ export interface SoilStation {
   readonly outdoor_C: Float64Array
   /** Global horizontal radiation, mean of the day [W/m²]. */
   readonly global_Wm2: Float64Array
+  /** Rain and melted snow of the year [mm]; missing days count as dry. */
+  readonly rain_mm: number
   /** Mean relative humidity of each day [%]; null where the station has none. */
   readonly humidity_pct: Float64Array | null
   /** By depth, in the order of STATION_DEPTHS_M [°C]. */
@@ -56,6 +58,7 @@ export function readSoilStations(text: string): SoilStation[] {
       latitude_deg: Number(rows[0][names.indexOf('latitude')]),
       outdoor_C: needed('t_daily_avg'),
       global_Wm2: needed('solarad_daily').map((mega) => (mega * 1e6) / 86400),
+      rain_mm: rows.reduce((sum, cells) => sum + Number(cells[names.indexOf('p_daily_calc')]), 0),
       humidity_pct: read('rh_daily_avg'),
       soil_C: [5, 10, 20, 50, 100].map((depth) => needed(`soil_temp_${depth}_daily`)),
     }
