@@ -62,6 +62,7 @@ async function main(args: readonly string[]): Promise<void> {
   const told = [
     `${result.option.name}${place}`,
     `Climate: ${climate.place.name}. ${climate.source}`,
+    ...(result.hasGround ? [`Told for ${result.guess} soil, the state you expect.`] : []),
     '',
     ...said.filter(({ kind }) => kind === 'answer').map(({ text }) => text),
     '',

@@ -1,4 +1,4 @@
-import { existsSync, readFileSync } from 'node:fs'
+import { readFileSync } from 'node:fs'
 import { z } from 'zod'
 import { libraryCover } from '#contract/cover.ts'
 import { libraryGlazing } from '#contract/glazing.ts'
@@ -26,9 +26,7 @@ function readLibrary(): Library {
     materials: byId('materials.json', read('materials.json', rows('materials', libraryMaterial)).materials),
     soils: byId('soils.json', read('soils.json', rows('soils', librarySoil)).soils),
     covers: byId('covers.json', read('covers.json', rows('covers', libraryCover)).covers),
-    glazings: existsSync(new URL('glazings.json', dataFolder))
-      ? byId('glazings.json', read('glazings.json', rows('glazings', libraryGlazing)).glazings)
-      : new Map(),
+    glazings: byId('glazings.json', read('glazings.json', rows('glazings', libraryGlazing)).glazings),
     woods: byId('fuels.json', woods),
     stoves: byId('fuels.json', stoves),
   }

@@ -1,9 +1,12 @@
 import type { Option } from '#contract/option.ts'
 import type { SoilState } from '#contract/soil.ts'
 import { cautions } from './cautions.ts'
-import { dayText, listText, monthsText } from './dates.ts'
+import { dayText, listText, monthsText, plural } from './dates.ts'
 import type { OptionResult, RunResult, StateResult } from './option-result.ts'
 import type { UnitTexts } from './units.ts'
+
+/** A yearly wave smaller than this has no day that is warmest [K]. */
+const STILL_K = 0.3
 
 /** One sentence about a house. */
 export interface Answer {
@@ -20,7 +23,7 @@ export function answers(result: OptionResult, option: Option, units: UnitTexts):
   const say = (topic: Answer['topic'], texts: readonly (string | null)[]): Answer[] =>
     texts.filter((text) => text !== null).map((text) => ({ topic, kind: 'answer', text }))
   return [
-    ...say('cold', [coldest(result, own, units), coldDays(result, own)]),
+    ...say('cold', [coldest(result, own, units), coldDays(result, own, units)]),
     ...say('warm', [warmest(own, units), warmDays(own, units)]),
     ...say('swing', [swing(own, units)]),
     ...say('fire', [fire(result, own, units), fireLimit(result, own, units)]),
@@ -41,9 +44,7 @@ function coldest(result: OptionResult, own: StateResult, units: UnitTexts): stri
     (run) => run.measures.extremes.coldest.temperature_C,
     units.temperature,
   )
-  const soil = result.hasGround ? ` with ${own.state} soil` : ''
-  const lead = others.length > 0 ? soil : ''
-  return `${head} falls to ${units.temperature(coldest.temperature_C)} on the coldest night (${dayText(coldest)})${lead}${tail(others)}.`
+  return `${head} falls to ${units.temperature(coldest.temperature_C)} on the coldest night (${dayText(coldest)})${tail(others)}.`
 }
 
 /** The same figure in the other soil states, where it reads differently. */
@@ -61,17 +62,21 @@ function differing(
     .filter((one) => one.text !== mine)
 }
 
+/** 11.4 °C if the soil is damp or wet; states that read alike are named together. */
 function tail(others: readonly { readonly state: SoilState; readonly text: string }[]): string {
-  return others.length === 0
-    ? ''
-    : `, ${listText(others.map(({ state, text }) => `${text} if it is ${state}`))}`
+  const texts = [...new Set(others.map(({ text }) => text))].map((text, i) => {
+    const states = others.filter((one) => one.text === text).map(({ state }) => state)
+    return `${text} if ${i === 0 ? 'the soil' : 'it'} is ${states.join(' or ')}`
+  })
+  return texts.length === 0 ? '' : `, ${listText(texts)}`
 }
 
-function coldDays(result: OptionResult, own: StateResult): string | null {
+function coldDays(result: OptionResult, own: StateResult, units: UnitTexts): string | null {
   const [below] = own.free.measures.extremes.below
-  const head = result.hasHeating ? 'Without a fire it' : 'It'
   if (below.hours === 0) return null
-  return `${head} is colder than ${below.limit_C} °C at some hour of ${plural(below.days, 'day')} in a year, ${plural(below.daysInARow, 'day')} of them in a row.`
+  const head = result.hasHeating ? 'Without a fire it' : 'It'
+  const row = below.days > 1 ? `, ${below.daysInARow} of them in a row` : ''
+  return `${head} is colder than ${units.temperature(below.limit_C)} at some hour of ${plural(below.days, 'day')} in a year${row}.`
 }
 
 function warmest(own: StateResult, units: UnitTexts): string {
@@ -98,10 +103,7 @@ function fire(result: OptionResult, own: StateResult, units: UnitTexts): string 
   if (heating.year_kWh < 1) return 'The fire asked for is never needed.'
   const months = heating.month_kWh.flatMap((heat, m) => (heat >= 0.02 * heating.year_kWh ? [m + 1] : []))
   const others = differing(result, own, (run) => run.measures.heating.year_kWh, units.heat, 'lived')
-  return `To hold the warmth asked for takes ${units.heat(heating.year_kWh)} a year${tail(others)}; with ${own.state} soil about ${units.wood(heating.firewood)}, burnt in ${monthsText(months)}.`.replace(
-    result.hasGround ? '' : ` with ${own.state} soil`,
-    '',
-  )
+  return `To hold the warmth asked for takes ${units.heat(heating.year_kWh)} a year in ${monthsText(months)}, about ${units.wood(heating.firewood)}${others.length > 0 ? `; it takes${tail(others).slice(1)}` : ''}.`
 }
 
 function fireLimit(result: OptionResult, own: StateResult, units: UnitTexts): string | null {
@@ -111,26 +113,23 @@ function fireLimit(result: OptionResult, own: StateResult, units: UnitTexts): st
   return `The heater runs at its limit for ${plural(hours, 'hour')}; with it the coldest hour has ${units.temperature(coldest.temperature_C)}.`
 }
 
-/** The berm 2 m from the wall is warmest on 2 October, 71 days after the air. */
-function bermLag(own: StateResult, units: UnitTexts): (string | null)[] {
-  const { lags } = own.free.measures
-  const air = lags.find(({ kind }) => kind === 'outdoor')
-  const wanted = /: (berm, [\d.]+ m from the wall|3 m below the floor)$/
-  const seen = new Set<string>()
-  const lines = lags.filter(({ kind, name }) => {
-    const place = wanted.exec(name)?.[1]
-    if (kind !== 'probe' || place === undefined || seen.has(place)) return false
-    seen.add(place)
-    return true
-  })
-  const told = lines.filter(({ name }) => /berm, 2 m|below the floor/.test(name))
-  if (!air) return []
-  return told.map(({ name, amplitude, behindAir_d, damping, warmest, mean }) => {
-    const place = wanted.exec(name)![1].replace('berm, ', 'The berm ').replace(/^3 m/, 'The soil 3 m')
-    const days = Math.round(Math.abs(behindAir_d))
+/** The berm 2 m from the wall is warmest about 2 October, 71 days after the outdoor air. */
+function bermLag(own: StateResult, units: UnitTexts): string[] {
+  const places = [
+    { probe: ': berm, 2 m from the wall', place: `The berm ${units.length(2)} from the wall` },
+    { probe: ': 3 m below the floor', place: `The soil ${units.length(3)} below the floor` },
+  ]
+  return places.flatMap(({ probe, place }) => {
+    // The first bermed side's, or the first side's: the others read alike.
+    const line = own.free.measures.lags.find(({ kind, name }) => kind === 'probe' && name.endsWith(probe))
+    if (!line) return []
+    const { amplitude, behindAir_d, damping, warmest, mean } = line
+    if (amplitude < STILL_K) return [`${place} stays near ${units.temperature(mean)} all year.`]
+    const days = plural(Math.round(Math.abs(behindAir_d)), 'day')
     const late = behindAir_d >= 0 ? 'after' : 'before'
-    if (amplitude < 0.3) return `${place} stays near ${units.temperature(mean)} all year.`
-    return `${place} is warmest about ${dayText(warmest)}, ${plural(days, 'day')} ${late} the outdoor air, and moves ${Math.round(100 * damping)} % as far through the year.`
+    return [
+      `${place} is warmest about ${dayText(warmest)}, ${days} ${late} the outdoor air, and moves ${Math.round(100 * damping)} % as far through the year.`,
+    ]
   })
 }
 
@@ -138,11 +137,12 @@ function carryOver(own: StateResult, units: UnitTexts): string | null {
   const carried = own.free.measures.carryOver
   if (!carried || carried.held_kWh < 1) return null
   const { peak, trough, held_kWh, returned_kWh, firewood } = carried
+  const held = `Ground and mass hold ${units.heat(held_kWh)} more at their fullest (${dayText(peak)}) than at their emptiest (${dayText(trough)}).`
   const back =
     returned_kWh > 1
-      ? `${units.heat(returned_kWh)} of it came back into the room between those days, as much as ${units.wood(firewood.returned)}`
-      : 'none of it came back into the room: the room fed the ground all winter'
-  return `Ground and mass hold ${units.heat(held_kWh)} more at their fullest (${dayText(peak)}) than at their emptiest (${dayText(trough)}); without a fire ${back}.`
+      ? `Between those days ${units.heat(returned_kWh)} came back into the room, as much as ${units.wood(firewood.returned)}.`
+      : `Between those days the room still gave them ${units.heat(-returned_kWh)} more than it got.`
+  return `${held} ${back}`
 }
 
 function firstYears(result: OptionResult, own: StateResult, units: UnitTexts): string | null {
@@ -156,8 +156,4 @@ function firstYears(result: OptionResult, own: StateResult, units: UnitTexts): s
   if (!result.hasHeating) return head
   const wood = own.lived.charging.map(({ heating }, i) => `${units.heat(heating.year_kWh)} in year ${i + 1}`)
   return `${head} Backup heat takes ${listText(wood)}, and ${units.heat(own.lived.measures.heating.year_kWh)} later.`
-}
-
-export function plural(count: number, word: string): string {
-  return `${String(count).replace(/\B(?=(\d{3})+(?!\d))/g, ',')} ${word}${count === 1 ? '' : 's'}`
 }

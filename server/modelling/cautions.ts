@@ -1,6 +1,6 @@
 import type { Option } from '#contract/option.ts'
 import type { Answer } from './answers.ts'
-import { listText, monthsText } from './dates.ts'
+import { listText, monthsText, plural } from './dates.ts'
 import type { OptionResult, StateResult } from './option-result.ts'
 import type { UnitTexts } from './units.ts'
 
@@ -12,7 +12,7 @@ export function cautions(result: OptionResult, own: StateResult, option: Option,
   const say = (topic: Answer['topic'], texts: readonly (string | null)[]): Answer[] =>
     texts.filter((text) => text !== null).map((text) => ({ topic, kind: 'caution', text }))
   return [
-    ...say('warm', [heat(own, units)]),
+    ...say('warm', [option.use.people > 0 ? heat(own, units) : null]),
     ...say('damp', [damp(own)]),
     ...say('air', [freshAir(own, option, units), radon(result), stove(result, own)]),
     ...say('building', [soilPressure(option, units), roofLoad(option), nearBerm(option)]),
@@ -22,7 +22,7 @@ export function cautions(result: OptionResult, own: StateResult, option: Option,
 function heat(own: StateResult, units: UnitTexts): string | null {
   const hot = own.free.measures.extremes.above.find(({ limit_C }) => limit_C === HOT_C)
   if (!hot || hot.hours < 20) return null
-  return `Above ${units.temperature(HOT_C)} for ${hot.hours} hours: heat like this harms children, old and ill people. Look at shade and night air first.`
+  return `Above ${units.temperature(HOT_C)} for ${plural(hot.hours, 'hour')}: heat like this harms children, old and ill people. Look at shade and night air first.`
 }
 
 function damp(own: StateResult): string | null {

@@ -34,3 +34,8 @@ export function monthsText(months: readonly number[]): string {
 export function listText(words: readonly string[]): string {
   return words.length < 2 ? (words[0] ?? '') : `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`
 }
+
+/** 1 day, 1,200 days. */
+export function plural(count: number, word: string): string {
+  return `${String(count).replace(/\B(?=(\d{3})+(?!\d))/g, ',')} ${word}${count === 1 ? '' : 's'}`
+}

@@ -35,6 +35,8 @@ export interface OptionResult {
   readonly option: { readonly name: string; readonly place: string | null }
   readonly climate: { readonly place: ClimatePlace; readonly source: string }
   readonly guess: SoilState
+  /** The fixed comfort range of the option. */
+  readonly comfort: Option['comfort']
   readonly hasGround: boolean
   readonly hasHeating: boolean
   readonly hasCooling: boolean
@@ -83,6 +85,7 @@ export function optionResult(
     option: { name: option.name, place: option.place ?? null },
     climate: { place: climate.place, source: climate.source },
     guess,
+    comfort: option.comfort,
     hasGround,
     hasHeating,
     hasCooling,

@@ -45,7 +45,7 @@ function seasonTable(result: OptionResult, units: UnitTexts): string[] {
   const degrees = units.temperatureUnit
   const fire = result.hasHeating || result.hasCooling ? ' without a fire' : ''
   const line = (name: string, value: (state: StateResult) => string) => [name, ...states.map(value)]
-  const comfort = states[0].free.measures.comfort.fixed
+  const { low_C, high_C } = result.comfort
   const outside = (run: RunResult) => {
     const { below_h, above_h } = run.measures.comfort.fixed
     return `${below_h} / ${above_h}`
@@ -54,7 +54,7 @@ function seasonTable(result: OptionResult, units: UnitTexts): string[] {
     line(`coldest hour${fire}, ${degrees}`, ({ free }) => t(free.measures.extremes.coldest.temperature_C)),
     line(`warmest hour${fire}, ${degrees}`, ({ free }) => t(free.measures.extremes.warmest.temperature_C)),
     line(`mean of the year${fire}, ${degrees}`, ({ free }) => t(free.measures.extremes.mean_C)),
-    line(`hours below / above ${comfort.name}`, ({ free }) => outside(free)),
+    line(`hours below ${t(low_C)} / above ${t(high_C)}, ${degrees}`, ({ free }) => outside(free)),
   ]
   if (result.hasHeating)
     rows.push(
@@ -74,8 +74,8 @@ function seasonTable(result: OptionResult, units: UnitTexts): string[] {
       line(`held over from autumn, ${units.heatUnit}`, ({ free }) =>
         units.heatNumber(free.measures.carryOver?.held_kWh ?? 0),
       ),
-      line(`of it back in the room, ${units.heatUnit}`, ({ free }) =>
-        units.heatNumber(Math.max(0, free.measures.carryOver?.returned_kWh ?? 0)),
+      line(`net of it back in the room, ${units.heatUnit}`, ({ free }) =>
+        units.heatNumber(free.measures.carryOver?.returned_kWh ?? 0),
       ),
     )
   const head = [

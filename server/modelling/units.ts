@@ -30,8 +30,8 @@ export interface UnitTexts {
 
 /** Whole tens from 20 on, so that nobody takes a sum over the year for a reading; ones below. */
 function tens(value: number): string {
-  const rounded = value >= 20 ? Math.round(value / 10) * 10 : Math.round(value)
-  return grouped(rounded)
+  const rounded = Math.abs(value) >= 20 ? Math.round(value / 10) * 10 : Math.round(value)
+  return grouped(rounded === 0 ? 0 : rounded)
 }
 
 /** Thousands apart by a comma. */
