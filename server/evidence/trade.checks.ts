@@ -1,10 +1,10 @@
 import { HOURS, HOUR_S, type ClimateYear } from '#engine/climate/climate-year.ts'
-import { dailyMeans } from '#engine/climate/day-values.ts'
+import { dailyMeans, dailyRanges } from '#engine/climate/day-values.ts'
 import { generateYear } from '#engine/climate/generate-year.ts'
 import { undisturbedGround } from '#engine/climate/ground.ts'
 import { firstHarmonic } from '#engine/climate/harmonic.ts'
 import { readTmy3 } from '#engine/climate/tmy3.ts'
-import { massDepth } from '#engine/measures/mass-depth.ts'
+import type { Layer } from '#engine/conduction/specs.ts'
 import { planeIrradiance } from '#engine/solar/plane.ts'
 import { sunAt, sunOfYear } from '#engine/solar/sun.ts'
 import { chargingYears } from '#engine/year/charging.ts'
@@ -17,6 +17,7 @@ import { parseNormals } from '../climates/normals-file.ts'
 import { loadLibrary } from '../libraries/library.ts'
 import { check, type Check, type CheckGroup, type EvidenceInputs } from './check.ts'
 import { DRY_BERM_SOIL, earthHouse, type EarthHouse } from './parts/earth-house.ts'
+import { plainRoom } from './parts/plain-room.ts'
 import { waveFromWeather } from './parts/surface-balance.ts'
 
 /** What the trade says, against what the program computes. */
@@ -24,7 +25,7 @@ export const tradeChecks: CheckGroup = {
   topic: 'Sayings of the trade',
   run: (inputs) => [
     ...deepSoil(inputs),
-    ...walls(),
+    ...walls(inputs),
     ...houses(inputs),
     ...overhangs(inputs),
     ...turnedGlass(inputs),
@@ -121,22 +122,28 @@ function deepSoil(inputs: EvidenceInputs): Check[] {
   ]
 }
 
-function walls(): Check[] {
-  const adobe = { name: 'adobe', conductivity_WmK: 0.6, volumetricHeat_Jm3K: 1.6e6 }
-  const depth90 = (thickness_m: number) =>
-    massDepth('wall', 'wall', [{ ...adobe, thickness_m }], { kind: 'film', film_Wm2K: 25 }, thickness_m).day
-      .depth90_m
+/** Two closed rooms in the March of a dry and sunny place: mean daily swing of one over that of the other. */
+function walls(inputs: EvidenceInputs): Check[] {
+  const climate = builtIn(inputs, 'kerman')
+  const swing_K = (shell: Layer) => {
+    const { trace } = repeatingYear(assemble(plainRoom(shell), climate))
+    const march = dailyRanges(trace.air_C).subarray(59, 90)
+    return march.reduce((sum, value) => sum + value, 0) / march.length
+  }
+  const earth = { name: 'earth', thickness_m: 0.5, conductivity_WmK: 0.6, volumetricHeat_Jm3K: 1.6e6 }
+  const concrete = { name: 'concrete', thickness_m: 0.1, conductivity_WmK: 1.8, volumetricHeat_Jm3K: 2.4e6 }
   return [
     check({
       ...common,
-      id: 'TRD-10',
+      id: 'OPQ-08/swing',
       title:
-        'The day is served by about the first 100 mm of an earth wall: depth that holds 90 % of its daily heat',
-      source: 'Builders; 4 to 6 in of effective mass in the guidelines of 1989 (PSIC, SERI)',
-      unit: 'mm',
-      expected: [75, 152],
+        'A room of 0.5 m of earth swings a quarter as much in a day as one of 0.1 m of concrete, or less',
+      source: 'H. Fathy, trial houses at Cairo, March 1964, as told by G. Minke: 4 K and 16 K',
+      unit: '1',
+      expected: [0, 0.25],
       tolerance: 0,
-      computed: 1000 * depth90(0.4),
+      computed: swing_K(earth) / swing_K(concrete),
+      note: 'Another dry and sunny place (Kerman) and rooms without openings: a comparison of kinds. The trial houses had windows, which make the earth room swing more.',
     }),
   ]
 }

@@ -69,5 +69,5 @@ test('a spike of one hour, a missing hour and a value that is no number are fill
 
 test('a station without a whole year is refused by its number', () => {
   const text = 'wban,lst_date\n12345,2020-01-01'
-  expect(() => readSoilStations(text)).toThrow(/12345/)
+  expect(() => readSoilStations(text)).toThrow('Station 12345 has 1 days, not 365.')
 })
