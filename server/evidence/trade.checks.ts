@@ -58,18 +58,9 @@ function deepSoil(inputs: EvidenceInputs): Check[] {
   const deep = waveFromWeather(builtIn(inputs, 'missoula'), grass, DRY_BERM_SOIL, 6)
   return [
     check({
-      id: 'GND-13/lag',
-      title: 'Delay of the year at 20 ft in soil of 3.75e-7 m²/s',
-      source: 'Half a wavelength of the yearly wave, Carslaw and Jaeger 1959, 2.6',
-      provenance: 'derived',
-      unit: 'd',
-      expected: 182.5,
-      tolerance: 0.5,
-      computed: yearAt(20 * FOOT_M, 3.7509e-7).delay_d,
-    }),
-    check({
       id: 'GND-13/amplitude',
-      title: 'What is left there of a swing at the surface, of 1',
+      title:
+        'What is left of a swing at the surface, of 1, at 20 ft in soil where the year comes half a year late',
       source: 'Carslaw and Jaeger 1959, 2.6: e^-π',
       provenance: 'derived',
       unit: '1',
