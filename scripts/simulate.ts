@@ -53,7 +53,12 @@ async function main(args: readonly string[]): Promise<void> {
   await writeWhole([
     ...(out === undefined
       ? []
-      : [{ path: out, parts: [`${JSON.stringify({ ...result, answers: said })}\n`] }]),
+      : [
+          {
+            path: out,
+            parts: [`${JSON.stringify({ ...result, answers: answers(result, option, siUnits) })}\n`],
+          },
+        ]),
     ...(hourly === undefined
       ? []
       : [{ path: hourly, parts: lines(hourlyRows(traces, result.guess, climate)) }]),
