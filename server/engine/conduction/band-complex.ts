@@ -32,7 +32,10 @@ export function complexFactor(matrix: BandMatrix, capacity: Float64Array, omega_
       let x = re[row + j]
       let y = im[row + j]
       for (let k = Math.max(first, j - halfWidth); k < j; k++) {
-        const [a, b, c, d] = [re[row + k], im[row + k], re[other + k], im[other + k]]
+        const a = re[row + k]
+        const b = im[row + k]
+        const c = re[other + k]
+        const d = im[other + k]
         x -= a * c - b * d
         y -= a * d + b * c
       }

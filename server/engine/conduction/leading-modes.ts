@@ -5,8 +5,11 @@ import { addDirection } from './rational-basis.ts'
 import { symmetricModes } from './symmetric-modes.ts'
 import type { ReducedElement } from './thermal-system.ts'
 
-/** What the boundaries see of a system in modes. */
-export type ModalSystem = Pick<ReducedElement, 'modes' | 'decay_s' | 'gain' | 'conductance_WK'>
+/** A system in modes, as far as its answers go. */
+export interface ModalSystem extends Pick<ReducedElement, 'modes' | 'decay_s' | 'gain' | 'conductance_WK'> {
+  /** Temperatures inside that matter too, `watched[p * modes + k]`: weights that sum to 1, turned to modes. */
+  readonly watched: Float64Array
+}
 
 const HOUR_S = 3600
 const SLOWEST_S = 20 * 365 * 86400
@@ -25,13 +28,14 @@ const HELD_PERIODS_S = [20, 5, 1, 0.25]
  * of both systems are compared, not estimated.
  *
  * @param kept        directions (combinations of modes) that must stay whole
- * @param tolerance_K largest difference of a surface temperature for inputs of 1 K, for periods of 6 h and more
+ * @param tolerance   largest difference of a flow, as a share of what 1 K at its own group brings at that period,
+ *   for periods of 6 h and more; as much may a watched temperature be off for 1 K [K]
  * @returns orthonormal directions, each of length `system.modes`
  */
 export function leadingDirections(
   system: ModalSystem,
   kept: readonly Float64Array[],
-  tolerance_K: number,
+  tolerance: number,
 ): Float64Array[] {
   const first: Float64Array[] = []
   for (const direction of kept) addDirection(first, direction.slice(), 1e-9)
@@ -42,12 +46,12 @@ export function leadingDirections(
       addDirection(directions, ranked[i].slice(), 1e-6)
     return directions
   }
-  const wanted = HELD_PERIODS_S.map((period_s) => modalAdmittance(system, (2 * Math.PI) / period_s))
+  const wanted = HELD_PERIODS_S.map((period_s) => answers(system, (2 * Math.PI) / period_s))
   let low = first.length
   let high = system.modes
   while (low < high) {
     const middle = (low + high) >> 1
-    if (isAlike(shortened(system, taken(middle)).system, wanted, tolerance_K)) high = middle
+    if (isAlike(shortened(system, taken(middle)).system, wanted, tolerance)) high = middle
     else low = middle + 1
   }
   return taken(low)
@@ -55,18 +59,20 @@ export function leadingDirections(
 
 /** Directions of the frequency response that `first` leaves, the strongest first. */
 function rankedDirections(system: ModalSystem, first: readonly Float64Array[]): Float64Array[] {
-  const { modes: size, decay_s, gain, conductance_WK } = system
-  const groups = conductance_WK.length
+  const { modes: size, decay_s, gain } = system
+  const groups = system.conductance_WK.length
   const slow = Math.log((2 * Math.PI) / SLOWEST_S)
   const fast = Math.log((2 * Math.PI) / HOUR_S)
   const seen = new Float64Array(size * size)
   for (let sample = 0; sample < SAMPLES; sample++) {
     const omega = Math.exp(slow + ((fast - slow) * (sample + 0.5)) / SAMPLES)
+    const own = modalAdmittance(system, omega)
     for (let g = 0; g < groups; g++) {
       const re = new Float64Array(size)
       const im = new Float64Array(size)
       // The error of an answer goes with the square of the state's, times ω: hence a weight that rises with ω.
-      const scale = Math.pow(omega, 0.35) / Math.sqrt(conductance_WK[g])
+      const at = g * groups + g
+      const scale = Math.pow(omega, 0.4) / Math.sqrt(Math.hypot(own.re[at], own.im[at]))
       for (let k = 0; k < size; k++) {
         const share = (scale * gain[k * groups + g]) / (decay_s[k] * decay_s[k] + omega * omega)
         re[k] = share * decay_s[k]
@@ -91,17 +97,43 @@ function rankedDirections(system: ModalSystem, first: readonly Float64Array[]): 
     .map(({ column }) => Float64Array.from(eigenvectorMatrix.getColumn(column)))
 }
 
-function isAlike(system: ModalSystem, wanted: readonly Admittance[], tolerance_K: number): boolean {
-  const { conductance_WK } = system
-  const groups = conductance_WK.length
-  return HELD_PERIODS_S.every((period_s, n) => {
-    const { re, im } = modalAdmittance(system, (2 * Math.PI) / period_s)
-    for (let g = 0; g < groups; g++)
-      for (let h = 0; h < groups; h++) {
-        const at = g * groups + h
-        const off_WK = Math.hypot(re[at] - wanted[n].re[at], im[at] - wanted[n].im[at])
-        if (!(off_WK <= tolerance_K * conductance_WK[g])) return false
+interface Answers {
+  readonly flow: Admittance
+  readonly inside: Admittance
+}
+
+/** Flows at the boundaries, and watched temperatures p for 1 K at group h, `[p * groups + h]`. */
+function answers(system: ModalSystem, omega: number): Answers {
+  const { modes, decay_s, gain, watched } = system
+  const groups = system.conductance_WK.length
+  const re = new Float64Array((watched.length / modes) * groups)
+  const im = new Float64Array(re.length)
+  for (let k = 0; k < modes; k++) {
+    const square = decay_s[k] * decay_s[k] + omega * omega
+    for (let h = 0; h < groups; h++) {
+      const share = gain[k * groups + h] / square
+      for (let at = h, from = k; from < watched.length; at += groups, from += modes) {
+        re[at] += watched[from] * share * decay_s[k]
+        im[at] -= watched[from] * share * omega
       }
+    }
+  }
+  return { flow: modalAdmittance(system, omega), inside: { re, im } }
+}
+
+function isAlike(system: ModalSystem, wanted: readonly Answers[], tolerance: number): boolean {
+  const groups = system.conductance_WK.length
+  const distance = (a: Admittance, b: Admittance, at: number) =>
+    Math.hypot(a.re[at] - b.re[at], a.im[at] - b.im[at])
+  return HELD_PERIODS_S.every((period_s, n) => {
+    const { flow, inside } = answers(system, (2 * Math.PI) / period_s)
+    for (let at = 0; at < flow.re.length; at++) {
+      const own = Math.floor(at / groups) * (groups + 1)
+      const allowed_WK = tolerance * Math.hypot(wanted[n].flow.re[own], wanted[n].flow.im[own])
+      if (!(distance(flow, wanted[n].flow, at) <= allowed_WK)) return false
+    }
+    for (let at = 0; at < inside.re.length; at++)
+      if (!(distance(inside, wanted[n].inside, at) <= tolerance)) return false
     return true
   })
 }
@@ -144,9 +176,13 @@ export function shortened(
   }
   const groups = system.conductance_WK.length
   const gain = new Float64Array(size * groups)
+  const watched = new Float64Array((system.watched.length / old) * size)
   for (let i = 0; i < old; i++)
-    for (let k = 0; k < size; k++)
-      for (let g = 0; g < groups; g++)
-        gain[k * groups + g] += turn[i * size + k] * system.gain[i * groups + g]
-  return { system: { modes: size, decay_s, gain, conductance_WK: system.conductance_WK }, turn }
+    for (let k = 0; k < size; k++) {
+      const share = turn[i * size + k]
+      for (let g = 0; g < groups; g++) gain[k * groups + g] += share * system.gain[i * groups + g]
+      for (let at = k, from = i; at < watched.length; at += size, from += old)
+        watched[at] += share * system.watched[from]
+    }
+  return { system: { modes: size, decay_s, gain, conductance_WK: system.conductance_WK, watched }, turn }
 }

@@ -1,8 +1,10 @@
+import { complexFactor, complexSolve } from './band-complex.ts'
 import { choleskyFactor, choleskySolve, dotAt } from './band-matrix.ts'
 import type { ThermalSystem } from './thermal-system.ts'
 
 const SLOWEST_S = 20 * 365 * 86400
 const FASTEST_S = 15 * 60
+const YEAR_S = 365 * 86400
 
 /** A new direction counts when at least this share of it is new: below, it would be mostly rounding. */
 const NEW_SHARE = 1e-7
@@ -12,14 +14,16 @@ const NEW_SHARE = 1e-7
  *
  * For each shift s the solutions of (K + s C) v = B_g for every boundary group are the answers to inputs
  * that grow at rate s (a block rational Krylov space with one vector a shift). The constant field comes
- * first and is exact; shift 0 adds the steady states.
+ * first and is exact; shift 0 adds the steady states. Both phases of the answer to a yearly sine,
+ * (K + iωC) v = B_g, are there as well: the first harmonic of every node, which says how late and how much
+ * damped summer arrives somewhere, is exact.
  * Source: A. C. Antoulas, Approximation of Large-Scale Dynamical Systems, 2005, chapter 11 (from memory).
  *
  * @param inputs      B, one column of nodes for each group
  * @param shifts      how many besides 0, evenly in the logarithm from 1/(20 years) to 1/(15 minutes)
  * @param extraFields nodal temperatures that must lie in the space as well
  * @returns √C times each field, orthonormal in the plain sense; the first ones, `kept` of them, hold the
- *   constant, the steady states and the extra fields
+ *   constant, the steady states, the yearly sine and the extra fields
  */
 export function rationalBasis(
   system: ThermalSystem,
@@ -42,6 +46,14 @@ export function rationalBasis(
   }
   add(new Float64Array(root.length).fill(1), 0)
   answers(0)
+  const yearly = complexFactor(conductance_WK, capacity_JK, (2 * Math.PI) / YEAR_S)
+  for (const input of inputs) {
+    const re = input.slice()
+    const im = new Float64Array(re.length)
+    complexSolve(yearly, re, im)
+    add(re, NEW_SHARE)
+    add(im, NEW_SHARE)
+  }
   for (const field of extraFields) add(field, 1e-12)
   const kept = fields.length
   for (const shift of shiftRates(shifts)) answers(shift)

@@ -8,12 +8,15 @@ import type { ReducedElement, ThermalSystem } from './thermal-system.ts'
 const WHOLE_NODES = 40
 
 export interface ReduceOptions {
-  /** Shifts besides 0, evenly spaced in the logarithm from 1/(20 years) to 1/(15 minutes). */
+  /** Shifts besides 0, evenly spaced in the logarithm from 1/(20 years) to 1/(15 minutes); 12, or 20 for one or two groups. */
   readonly shifts?: number
   /** Nodal fields that must lie in the span of the modes as well, for example start states. */
   readonly extraFields?: readonly Float64Array[]
-  /** What leaving out the weaker modes may cost: error of a surface temperature for inputs of 1 K [K]; 0 leaves none out. */
-  readonly tolerance_K?: number
+  /**
+   * What leaving out the weaker modes may cost: error of a flow as a share of what 1 K at its own group brings,
+   * for every period of 6 h and more, and of a probe in K for 1 K; 0 leaves none out.
+   */
+  readonly tolerance?: number
 }
 
 /**
@@ -29,7 +32,7 @@ export interface ReduceOptions {
  * @throws RangeError for a node without heat capacity or a system that is not positive definite
  */
 export function reduce(system: ThermalSystem, options: ReduceOptions = {}): ReducedElement {
-  const { shifts = 12, extraFields = [], tolerance_K = 1e-3 } = options
+  const { shifts = system.boundaries.length > 2 ? 12 : 20, extraFields = [], tolerance = 3e-3 } = options
   const { capacity_JK, boundaries } = system
   const nodes = capacity_JK.length
   capacity_JK.forEach((capacity, node) => {
@@ -45,9 +48,9 @@ export function reduce(system: ThermalSystem, options: ReduceOptions = {}): Redu
     ? { fields: unitFields(nodes), kept: nodes }
     : rationalBasis(system, inputs, shifts, extraFields)
   const all = modesOn(system, inputs, fields)
-  if (isSmall || tolerance_K === 0) return element(system, fields, all.modal, all.turn)
+  if (isSmall || tolerance === 0) return element(system, fields, all.modal, all.turn)
   const keptFields = fields.slice(0, kept).map((_, j) => row(all.turn, j, fields.length))
-  const directions = leadingDirections(all.modal, keptFields, tolerance_K)
+  const directions = leadingDirections(all.modal, keptFields, tolerance)
   const { system: modal, turn } = shortened(all.modal, directions)
   return element(system, fields, modal, product(all.turn, turn, fields.length, modal.modes))
 }
@@ -109,8 +112,19 @@ function modesOn(
       for (let k = 0; k < size; k++) gain[k * groups + g] += along * vectors[j * size + k]
     }
   })
+  const watched = new Float64Array(system.probes.length * size)
+  system.probes.forEach(({ node, weight }, p) => {
+    // A content is watched as the mean temperature it stands for.
+    const whole = weight.reduce((sum, value) => sum + Math.abs(value), 0)
+    for (let j = 0; j < size; j++) {
+      let value = 0
+      for (let i = 0; i < node.length; i++)
+        value += (weight[i] * byRoot[node[i]] * fields[j][node[i]]) / whole
+      for (let k = 0; k < size; k++) watched[p * size + k] += value * vectors[j * size + k]
+    }
+  })
   const conductance_WK = Float64Array.from(inputs, (input) => input.reduce((sum, film) => sum + film, 0))
-  return { modal: { modes: size, decay_s: values, gain, conductance_WK }, turn: vectors }
+  return { modal: { modes: size, decay_s: values, gain, conductance_WK, watched }, turn: vectors }
 }
 
 /**
@@ -179,8 +193,11 @@ function element(
     }),
   )
   return {
-    ...modal,
+    modes,
+    decay_s: modal.decay_s,
     boundaries: boundaries.map((boundary) => boundary.name),
+    conductance_WK: modal.conductance_WK,
+    gain: modal.gain,
     content,
     probes: probes.map((probe) => probe.name),
     probeGain,

@@ -25,7 +25,7 @@ export interface PeriodError {
   readonly period_s: number
   /** Largest error of a group's mean surface temperature for 1 K at any group [K per K]. */
   readonly surface: number
-  /** Largest error of a flow from one group into the element, over the largest flow at that period. */
+  /** Largest error of a flow, as a share of the flow that 1 K at its own group brings at that period. */
   readonly flow: number
 }
 
@@ -51,15 +51,16 @@ export function reductionError(
     const few = modalAdmittance(reduced, omega_s)
     let surface = 0
     let flow = 0
-    let largest = 0
-    for (let g = 0; g < groups; g++)
+    for (let g = 0; g < groups; g++) {
+      const own = g * groups + g
+      const brought = Math.hypot(full.re[own], full.im[own])
       for (let h = 0; h < groups; h++) {
         const at = g * groups + h
         const off = Math.hypot(few.re[at] - full.re[at], few.im[at] - full.im[at])
         surface = Math.max(surface, off / conductance_WK[g])
-        flow = Math.max(flow, off)
-        largest = Math.max(largest, Math.hypot(full.re[at], full.im[at]))
+        flow = Math.max(flow, off / brought)
       }
-    return { period_s, surface, flow: flow / largest }
+    }
+    return { period_s, surface, flow }
   })
 }

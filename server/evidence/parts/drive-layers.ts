@@ -93,9 +93,12 @@ export function drive(
   return { flow, probe, residual: missed / (3600 * throughput) }
 }
 
-/** The modes of a system, as the house uses them. */
-export function modes(system: ThermalSystem, start_C?: Float64Array): SteppedElement {
-  return reducedStepper(reduce(system, { extraFields: start_C ? [start_C] : [] }), start_C)
+/** The modes of a system as the house uses them, or closer where small values deep inside are asked for. */
+export function modes(
+  system: ThermalSystem,
+  { start_C, tolerance }: { start_C?: Float64Array; tolerance?: number } = {},
+): SteppedElement {
+  return reducedStepper(reduce(system, { extraFields: start_C ? [start_C] : [], tolerance }), start_C)
 }
 
 export function allNodes(system: ThermalSystem, options: FullRunOptions = {}): SteppedElement {
