@@ -1,7 +1,9 @@
 import { HOURS, type ClimateYear } from '../climate/climate-year.ts'
 import type { WindowModel } from '../zone/house-model.ts'
+import { atIncidence } from './at-incidence.ts'
 import { planeIrradiance, type PlaneIrradiance } from './plane.ts'
-import { skyShare, sunlitShare } from './shading.ts'
+import { floorShare } from './lit-floor.ts'
+import { profileAngle, sideAngle, skyShare, sunlitShare } from './shading.ts'
 import type { SunYear } from './sun.ts'
 
 const RAD = Math.PI / 180
@@ -17,13 +19,13 @@ export interface WindowSun {
   readonly floorShare: Float64Array
 }
 
-/** Value at an angle of incidence, between the ten given ones [deg]. */
-export function atIncidence(values: readonly number[], incidence_deg: number): number {
-  const place = Math.min(Math.max(incidence_deg, 0), 90) / 10
-  const i = Math.min(8, Math.floor(place))
-  return values[i] + (place - i) * (values[i + 1] - values[i])
-}
-
+/**
+ * Sun through a window: beam and circumsolar light at their angle of incidence and behind overhang and fins,
+ * light of sky and ground as diffuse light, both less the frame and a seasonal shade.
+ *
+ * @param roomDepth_m from the window to the wall across, for where the beam lands
+ * @param plane radiation on the window's plane, where it is known already
+ */
 export function windowSun(
   climate: ClimateYear,
   sun: SunYear,
@@ -53,16 +55,15 @@ export function windowSun(
       if (beam <= 0) continue
       const cosine = plane.incidence[hour]
       const incidence_deg = Math.acos(Math.min(1, cosine)) / RAD
-      const side_deg = ((sun.azimuth_deg[hour] - exposure.faces_deg + 540) % 360) - 180
-      const profile = Math.atan2(Math.tan(sun.altitude_deg[hour] * RAD), Math.cos(side_deg * RAD))
-      const lit = exposure.tilt_deg > 60 ? sunlitShare(window, profile / RAD, side_deg) : 1
+      const side_deg = sideAngle(sun.azimuth_deg[hour], exposure.faces_deg)
+      const profile_deg = profileAngle(sun.altitude_deg[hour], side_deg)
+      const lit = exposure.tilt_deg > 60 ? sunlitShare(window, profile_deg, side_deg) : 1
       const beam_W = beam * glass_m2 * passes * lit
       const transmittance = atIncidence(glazing.transmittance, incidence_deg)
       out.transmittedBeam_W[hour] = beam_W * transmittance
-      out.inward_W[hour] += beam_W * (atIncidence(glazing.solarFactor, incidence_deg) - transmittance)
-      // Rays that reach the floor before the wall across come through below this height above the floor.
-      const reach = roomDepth_m * Math.tan(profile)
-      out.floorShare[hour] = Math.min(1, Math.max(0, (reach - window.sill_m) / window.height_m))
+      out.inward_W[hour] +=
+        beam_W * Math.max(0, atIncidence(glazing.solarFactor, incidence_deg) - transmittance)
+      out.floorShare[hour] = floorShare(window, profile_deg, roomDepth_m)
     }
   }
   return out
