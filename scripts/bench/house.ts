@@ -6,7 +6,7 @@ import type { HouseModel } from '../../server/engine/zone/house-model.ts'
 import { loadLibrary } from '../../server/libraries/library.ts'
 import { toHouse } from '../../server/modelling/to-house.ts'
 
-const OPTION = new URL('../../data/examples/juniper-shelf.json', import.meta.url)
+const OPTION = new URL('../../data/examples/larch-hollow.json', import.meta.url)
 
 /** The house that is measured: four sides, two bermed, in damp soil, in the climate it names. */
 export async function benchHouse() {

@@ -18,6 +18,8 @@ export async function measureMemory(runs: number) {
   run(0)
   const peakOfOne_MB = process.resourceUsage().maxRSS / 1024
   const held = () => {
+    // Buffers of typed arrays are let go in the collection after that of their views.
+    globalThis.gc?.()
     globalThis.gc?.()
     const { heapUsed, external, arrayBuffers } = process.memoryUsage()
     return (heapUsed + Math.max(external, arrayBuffers)) / MB
