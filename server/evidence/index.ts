@@ -3,14 +3,22 @@ import { calibrationChecks } from './calibration.checks.ts'
 import type { CheckGroup } from './check.ts'
 import { climateChecks } from './climate.checks.ts'
 import { comfortChecks } from './comfort.checks.ts'
+import { glazingChecks } from './glazing.checks.ts'
 import { massDepthChecks } from './mass-depth.checks.ts'
 import { measuredSoilChecks } from './measured-soil.checks.ts'
 import { moistAirChecks } from './moist-air.checks.ts'
 import { networkChecks } from './network.checks.ts'
+import { shadingChecks } from './shading.checks.ts'
+import { sunChecks } from './sun.checks.ts'
+import { tiltedChecks } from './tilted.checks.ts'
 import { tradeChecks } from './trade.checks.ts'
 
 /** Every topic of the evidence, in the order in which it is shown. */
 export const evidenceGroups: readonly CheckGroup[] = [
+  sunChecks,
+  tiltedChecks,
+  shadingChecks,
+  glazingChecks,
   ...climateChecks,
   measuredSoilChecks,
   massDepthChecks,
