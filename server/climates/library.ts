@@ -30,7 +30,14 @@ export async function loadClimate(nameOrFile: string): Promise<ClimateYear> {
   const place = builtIn(nameOrFile)
   if (place !== undefined) return generateYear(place.normals, BUILT_IN_SEED)
   if (!/[/\\]|\.[a-z0-9]{1,5}$/i.test(nameOrFile)) throw unknownName(nameOrFile)
-  return readClimateText(await readText(nameOrFile))
+  const text = await readText(nameOrFile)
+  try {
+    return readClimateText(text)
+  } catch (error) {
+    // The reader knows lines only; which file they are in is known here.
+    if (error instanceof ClimateFileError) error.message = `${nameOrFile}, ${error.message}`
+    throw error
+  }
 }
 
 /** Reads the text of a climate file, TMY3 or our own, recognised by content. */

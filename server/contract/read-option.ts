@@ -45,7 +45,7 @@ export function readOptionText(text: string, library: Library): Option {
   try {
     json = JSON.parse(text.replace(/^\uFEFF/, ''))
   } catch (error) {
-    throw new OptionError([{ pointer: '#', detail: `This is not JSON: ${(error as Error).message}` }])
+    throw new OptionError([{ pointer: '#', detail: `This is not JSON: ${(error as Error).message.replaceAll(/\s+/g, ' ')}` }])
   }
   return readOption(json, library)
 }
