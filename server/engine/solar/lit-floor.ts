@@ -26,8 +26,9 @@ export interface LitFloor {
 export function litFloor(opening: Opening, profile_deg: number): LitFloor | null {
   if (!(profile_deg > 0 && profile_deg < 90)) return null
   const fromHeight_m = opening.sill_m
-  const toHeight_m = opening.sill_m + opening.height_m - shadedHeight(opening, profile_deg)
-  if (toHeight_m <= fromHeight_m) return null
+  const lit_m = opening.height_m - shadedHeight(opening, profile_deg)
+  if (lit_m <= 0) return null
+  const toHeight_m = fromHeight_m + lit_m
   const slope = Math.tan(profile_deg * RAD)
   return { profile_deg, fromHeight_m, toHeight_m, from_m: fromHeight_m / slope, to_m: toHeight_m / slope }
 }

@@ -85,19 +85,24 @@ export function horizonAt(horizon_deg: readonly number[], azimuth_deg: number): 
   return horizon_deg[i] + (place - Math.floor(place)) * (next - horizon_deg[i])
 }
 
-/** Share of the plane's view of a uniform sky that stands above the horizon. */
+/**
+ * Share of the plane's view of a uniform sky that stands above the horizon: ∫∫ cos(incidence) cos(a) da dγ from
+ * the horizon up, over the same from the level up; in closed form over the altitude a, in steps of 5° around.
+ */
 function skyLeft(tilt_deg: number, faces_deg: number, horizon_deg: readonly number[]): number {
   if (horizon_deg.length === 0 || horizon_deg.every((altitude) => altitude <= 0)) return 1
+  const level = Math.cos(tilt_deg * RAD)
   let seen = 0
   let whole = 0
   for (let azimuth = 2.5; azimuth < 360; azimuth += 5) {
-    const edge = horizonAt(horizon_deg, azimuth)
-    for (let altitude = 1; altitude < 90; altitude += 2) {
-      const weight =
-        Math.max(0, incidenceCosine(altitude, azimuth, tilt_deg, faces_deg)) * Math.cos(altitude * RAD)
-      whole += weight
-      if (altitude >= edge) seen += weight
-    }
+    const towards = Math.sin(tilt_deg * RAD) * Math.cos((azimuth - faces_deg) * RAD)
+    const above = (altitude: number) =>
+      0.5 * level * Math.cos(altitude) ** 2 +
+      0.25 * towards * (Math.PI - 2 * altitude - Math.sin(2 * altitude))
+    // Behind its upper edge the plane sees the sky only above its own slope.
+    const own = Math.max(0, Math.atan2(-towards, level))
+    whole += above(own)
+    seen += above(Math.max(own, horizonAt(horizon_deg, azimuth) * RAD))
   }
   return seen / whole
 }
