@@ -45,7 +45,9 @@ export function readOptionText(text: string, library: Library): Option {
   try {
     json = JSON.parse(text.replace(/^\uFEFF/, ''))
   } catch (error) {
-    throw new OptionError([{ pointer: '#', detail: `This is not JSON: ${(error as Error).message.replaceAll(/\s+/g, ' ')}` }])
+    throw new OptionError([
+      { pointer: '#', detail: `This is not JSON: ${(error as Error).message.replaceAll(/\s+/g, ' ')}` },
+    ])
   }
   return readOption(json, library)
 }
