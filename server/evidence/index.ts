@@ -4,11 +4,14 @@ import type { CheckGroup } from './check.ts'
 import { climateChecks } from './climate.checks.ts'
 import { comfortChecks } from './comfort.checks.ts'
 import { glazingChecks } from './glazing.checks.ts'
+import { layersChecks } from './layers.checks.ts'
 import { massDepthChecks } from './mass-depth.checks.ts'
 import { measuredSoilChecks } from './measured-soil.checks.ts'
 import { moistAirChecks } from './moist-air.checks.ts'
 import { networkChecks } from './network.checks.ts'
+import { reductionChecks } from './reduction.checks.ts'
 import { shadingChecks } from './shading.checks.ts'
+import { slabChecks } from './slab.checks.ts'
 import { sunChecks } from './sun.checks.ts'
 import { tiltedChecks } from './tilted.checks.ts'
 import { tradeChecks } from './trade.checks.ts'
@@ -20,6 +23,9 @@ export const evidenceGroups: readonly CheckGroup[] = [
   shadingChecks,
   glazingChecks,
   ...climateChecks,
+  layersChecks,
+  slabChecks,
+  reductionChecks,
   measuredSoilChecks,
   massDepthChecks,
   comfortChecks,

@@ -120,6 +120,52 @@ export function choleskySolve(factor: BandMatrix, x: Float64Array): Float64Array
   return x
 }
 
+/** Solves L Lᵀ x = b in place for several right-hand sides, two at a time so that the factor is read half as often. */
+export function choleskySolveAll(factor: BandMatrix, columns: readonly Float64Array[]): void {
+  for (let n = 0; n + 1 < columns.length; n += 2) solvePair(factor, columns[n], columns[n + 1])
+  if (columns.length % 2 === 1) choleskySolve(factor, columns[columns.length - 1])
+}
+
+function solvePair({ size, halfWidth, data }: BandMatrix, x: Float64Array, y: Float64Array): void {
+  const stride = halfWidth + 1
+  for (let i = 0; i < size; i++) {
+    const at = i * stride + halfWidth - i
+    let a = x[i]
+    let b = y[i]
+    let a2 = 0
+    let b2 = 0
+    let k = Math.max(0, i - halfWidth)
+    for (; k + 1 < i; k += 2) {
+      const l = data[at + k]
+      const l2 = data[at + k + 1]
+      a -= l * x[k]
+      b -= l * y[k]
+      a2 -= l2 * x[k + 1]
+      b2 -= l2 * y[k + 1]
+    }
+    if (k < i) {
+      a -= data[at + k] * x[k]
+      b -= data[at + k] * y[k]
+    }
+    const inverse = 1 / data[at + i]
+    x[i] = (a + a2) * inverse
+    y[i] = (b + b2) * inverse
+  }
+  for (let i = size - 1; i >= 0; i--) {
+    const at = i * stride + halfWidth - i
+    const inverse = 1 / data[at + i]
+    const a = x[i] * inverse
+    const b = y[i] * inverse
+    x[i] = a
+    y[i] = b
+    for (let k = Math.max(0, i - halfWidth); k < i; k++) {
+      const l = data[at + k]
+      x[k] -= l * a
+      y[k] -= l * b
+    }
+  }
+}
+
 /** Σ a[i + n] b[j + n] in four sums side by side, which a processor adds at once. */
 export function dotAt(a: Float64Array, i: number, b: Float64Array, j: number, length: number): number {
   let s0 = 0

@@ -1,5 +1,5 @@
 import { complexFactor, complexSolve } from './band-complex.ts'
-import { choleskyFactor, choleskySolve, dotAt } from './band-matrix.ts'
+import { choleskyFactor, choleskySolveAll, dotAt } from './band-matrix.ts'
 import type { ThermalSystem } from './thermal-system.ts'
 
 const SLOWEST_S = 20 * 365 * 86400
@@ -42,7 +42,9 @@ export function rationalBasis(
     )
   const answers = (shift: number) => {
     const factor = choleskyFactor(conductance_WK, capacity_JK, shift)
-    for (const input of inputs) add(choleskySolve(factor, input.slice()), NEW_SHARE)
+    const fieldsOf = inputs.map((input) => input.slice())
+    choleskySolveAll(factor, fieldsOf)
+    for (const field of fieldsOf) add(field, NEW_SHARE)
   }
   add(new Float64Array(root.length).fill(1), 0)
   answers(0)
@@ -68,18 +70,26 @@ function shiftRates(count: number): number[] {
   )
 }
 
-/** Gram-Schmidt, twice, in place; what is nearly dependent on the known directions is dropped. */
+/** Gram-Schmidt in place, a second time where the first took most of it; what is nearly dependent is dropped. */
 export function addDirection(known: Float64Array[], field: Float64Array, newShare: number): boolean {
   const n = field.length
-  const length = Math.sqrt(dotAt(field, 0, field, 0, n))
-  for (let pass = 0; pass < 2; pass++)
+  const length = norm(field)
+  let before = length
+  let rest = length
+  do {
+    before = rest
     for (const direction of known) {
       const part = dotAt(direction, 0, field, 0, n)
       for (let i = 0; i < n; i++) field[i] -= part * direction[i]
     }
-  const rest = Math.sqrt(dotAt(field, 0, field, 0, n))
-  if (!(rest > newShare * length)) return false
+    rest = norm(field)
+    if (!(rest > newShare * length)) return false
+  } while (rest < 0.1 * before)
   for (let i = 0; i < n; i++) field[i] /= rest
   known.push(field)
   return true
+}
+
+function norm(field: Float64Array): number {
+  return Math.sqrt(dotAt(field, 0, field, 0, field.length))
 }

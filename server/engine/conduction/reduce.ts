@@ -8,7 +8,7 @@ import type { ReducedElement, ThermalSystem } from './thermal-system.ts'
 const WHOLE_NODES = 40
 
 export interface ReduceOptions {
-  /** Shifts besides 0, evenly spaced in the logarithm from 1/(20 years) to 1/(15 minutes); 12, or 20 for one or two groups. */
+  /** Shifts besides 0, evenly spaced in the logarithm from 1/(20 years) to 1/(15 minutes); 10, or 20 for one or two groups. */
   readonly shifts?: number
   /** Nodal fields that must lie in the span of the modes as well, for example start states. */
   readonly extraFields?: readonly Float64Array[]
@@ -32,7 +32,7 @@ export interface ReduceOptions {
  * @throws RangeError for a node without heat capacity or a system that is not positive definite
  */
 export function reduce(system: ThermalSystem, options: ReduceOptions = {}): ReducedElement {
-  const { shifts = system.boundaries.length > 2 ? 12 : 20, extraFields = [], tolerance = 3e-3 } = options
+  const { shifts = system.boundaries.length > 2 ? 10 : 20, extraFields = [], tolerance = 3e-3 } = options
   const { capacity_JK, boundaries } = system
   const nodes = capacity_JK.length
   capacity_JK.forEach((capacity, node) => {

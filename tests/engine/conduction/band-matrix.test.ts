@@ -6,6 +6,7 @@ import {
   bandTimes,
   choleskyFactor,
   choleskySolve,
+  choleskySolveAll,
 } from '#engine/conduction/band-matrix.ts'
 import type { BandMatrix } from '#engine/conduction/thermal-system.ts'
 import { seeded } from './make-systems.ts'
@@ -42,6 +43,15 @@ for (const [size, halfWidth] of [
     const back = bandTimes(matrix, x).map((value, i) => value + 0.3 * capacity[i] * x[i])
     right.forEach((value, i) => expect(back[i]).toBeCloseTo(value, 11))
   })
+
+test('three right-hand sides at once are solved as one by one', () => {
+  const random = seeded(5)
+  const factor = choleskyFactor(network(50, 6, random))
+  const columns = [0, 1, 2].map(() => Float64Array.from({ length: 50 }, () => random() - 0.5))
+  const one = columns.map((column) => choleskySolve(factor, column.slice()))
+  choleskySolveAll(factor, columns)
+  columns.forEach((column, c) => column.forEach((value, i) => expect(value).toBeCloseTo(one[c][i], 9)))
+})
 
 test('a steady sine solved in complex numbers satisfies (K + iωC) x = b', () => {
   const random = seeded(3)

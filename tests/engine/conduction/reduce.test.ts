@@ -59,7 +59,7 @@ for (const [name, system] of systems) {
 
   test(`${name}: flows differ by no more than the tolerance for periods of 6 h and more`, () => {
     const periods = [20 * 365, 365, 60, 4, 1, 0.25].map((days) => days * 86400)
-    // 12 or 20 shifts alone cost up to 0.1 % for a day; the rest is what leaving modes out may cost.
+    // 10 or 20 shifts alone cost up to 0.1 % for a day; the rest is what leaving modes out may cost.
     for (const { flow } of reductionError(system, element, periods)) expect(flow).toBeLessThan(0.003 + 0.001)
   })
 }
