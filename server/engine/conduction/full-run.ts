@@ -17,6 +17,8 @@ export interface SteppedElement {
   readonly finishHour: (u0: Float64Array, u1: Float64Array) => void
   /** Sets a uniform temperature. */
   readonly setUniform: (temperature_C: number) => void
+  /** Sets the temperature of every node of the system [°C]. */
+  readonly setField: (field_C: Float64Array) => void
   /** Heat held above 0 °C [J per unit of size]. */
   readonly stored_J: () => number
   /** Value of a probe at the present time, by its index. */
@@ -106,6 +108,7 @@ export function fullStepper(system: ThermalSystem, options: FullRunOptions = {})
       }
     },
     setUniform: (temperature_C) => void state.fill(temperature_C),
+    setField: (field_C) => state.set(field_C),
     stored_J: () => state.reduce((sum, value, i) => sum + value * capacity_JK[i], 0),
     probe: (index) =>
       probes[index].node.reduce((sum, node, i) => sum + probes[index].weight[i] * state[node], 0),
@@ -223,6 +226,7 @@ export function reducedStepper(element: ReducedElement, start_C?: Float64Array):
     setUniform: (temperature_C) => {
       for (let k = 0; k < modes; k++) state[k] = element.content[k] * temperature_C
     },
+    setField: (field_C) => void projectField(element, field_C, state),
     stored_J: () => state.reduce((sum, value, k) => sum + value * element.content[k], 0),
     probe: (index) => state.reduce((sum, value, k) => sum + value * element.probeGain[index * modes + k], 0),
   }
