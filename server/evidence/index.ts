@@ -12,6 +12,7 @@ import { networkChecks } from './network.checks.ts'
 import { reductionChecks } from './reduction.checks.ts'
 import { shadingChecks } from './shading.checks.ts'
 import { slabChecks } from './slab.checks.ts'
+import { soilChecks } from './soils.checks.ts'
 import { sunChecks } from './sun.checks.ts'
 import { tiltedChecks } from './tilted.checks.ts'
 import { tradeChecks } from './trade.checks.ts'
@@ -26,6 +27,7 @@ export const evidenceGroups: readonly CheckGroup[] = [
   layersChecks,
   slabChecks,
   reductionChecks,
+  soilChecks,
   measuredSoilChecks,
   massDepthChecks,
   comfortChecks,

@@ -13,7 +13,7 @@ import {
 } from '#engine/conduction/resistance.ts'
 import { lumpedSystem } from '#engine/conduction/lumped.ts'
 import { reduce } from '#engine/conduction/reduce.ts'
-import { penetrationDepth } from '#engine/measures/periodic-depth.ts'
+import { penetrationDepth } from '#engine/conduction/periodic-depth.ts'
 import { check, type Check, type CheckGroup, type EvidenceInputs } from './check.ts'
 import { chain, deepGround, drive, FIXED, modes, sineOf } from './parts/drive-layers.ts'
 

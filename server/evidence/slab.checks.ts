@@ -1,6 +1,6 @@
 import { reduce } from '#engine/conduction/reduce.ts'
 import { undisturbedGround } from '#engine/climate/ground.ts'
-import { penetrationDepth } from '#engine/measures/periodic-depth.ts'
+import { penetrationDepth } from '#engine/conduction/periodic-depth.ts'
 import { check, type Check, type CheckGroup } from './check.ts'
 import { chain, deepGround, drive, FIXED, modes, sineOf } from './parts/drive-layers.ts'
 

@@ -1,5 +1,5 @@
-import { exponential, minus, over, plus, scaled, size, times, type Complex } from '../measures/complex.ts'
-import { penetrationDepth, periodicField, type Behind } from '../measures/periodic-depth.ts'
+import { exponential, minus, over, plus, scaled, size, times, type Complex } from './complex.ts'
+import { penetrationDepth, periodicField, type Behind } from './periodic-depth.ts'
 import type { Layer } from './specs.ts'
 
 const DAY_S = 86400

@@ -1,7 +1,7 @@
 import type { Layer } from '../conduction/specs.ts'
 import type { HouseElement, HouseModel } from '../zone/house-model.ts'
-import { size } from './complex.ts'
-import { periodicField, type Behind, type PeriodicField } from './periodic-depth.ts'
+import { size } from '../conduction/complex.ts'
+import { periodicField, type Behind, type PeriodicField } from '../conduction/periodic-depth.ts'
 
 const DAY_S = 86400
 const YEAR_S = 365 * DAY_S

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { minus, times } from '#engine/measures/complex.ts'
+import { minus, times } from '#engine/conduction/complex.ts'
 import { periodicProperties, swingHeatCapacity, usefulDepth } from '#engine/conduction/periodic.ts'
 import { EARTH_WALL, layer } from './make-systems.ts'
 

@@ -1,7 +1,7 @@
 import { expect, test } from 'vitest'
-import { size } from '#engine/measures/complex.ts'
+import { size } from '#engine/conduction/complex.ts'
 import { massDepth, massDepths } from '#engine/measures/mass-depth.ts'
-import { penetrationDepth, periodicField } from '#engine/measures/periodic-depth.ts'
+import { penetrationDepth, periodicField } from '#engine/conduction/periodic-depth.ts'
 import { adobe, makeModel } from './make-trace.ts'
 
 const DAY_S = 86400

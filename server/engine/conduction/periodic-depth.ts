@@ -1,4 +1,4 @@
-import type { Layer } from '../conduction/specs.ts'
+import type { Layer } from './specs.ts'
 import { exponential, minus, over, plus, scaled, times, type Complex } from './complex.ts'
 
 /** What lies behind the last layer. */
