@@ -4,6 +4,7 @@ import type { CheckGroup } from './check.ts'
 import { climateChecks } from './climate.checks.ts'
 import { comfortChecks } from './comfort.checks.ts'
 import { glazingChecks } from './glazing.checks.ts'
+import { groundChecks } from './ground.checks.ts'
 import { layersChecks } from './layers.checks.ts'
 import { massDepthChecks } from './mass-depth.checks.ts'
 import { measuredSoilChecks } from './measured-soil.checks.ts'
@@ -26,6 +27,7 @@ export const evidenceGroups: readonly CheckGroup[] = [
   ...climateChecks,
   layersChecks,
   slabChecks,
+  groundChecks,
   reductionChecks,
   soilChecks,
   measuredSoilChecks,
