@@ -232,6 +232,9 @@ function stops(values: readonly number[]): number[] {
   return sorted.filter((value, i) => i === 0 || value - sorted[i - 1] > LEAST_M)
 }
 
+/** Level ground has few lines that must be, so it affords smaller cells. */
+const cellScale = (spec: SectionSpec) => (spec.berm ? 1 : 0.8)
+
 function columnLines(spec: SectionSpec): Float64Array {
   const outer_m = wallOuterFace(spec)
   const places = [0, spec.halfFloor_m, outer_m]
@@ -253,11 +256,12 @@ function columnLines(spec: SectionSpec): Float64Array {
     return Infinity
   }
   const fine = [spec.halfFloor_m, outer_m]
+  const scale = cellScale(spec)
   const size = (at: number) => {
     const wall = 0.03 + 0.26 * Math.min(...fine.map((face_m) => Math.abs(at - face_m)))
     const tip = 0.08 + 0.26 * Math.min(Infinity, ...tips.map((tip_m) => Math.abs(at - tip_m)))
     const inBerm = foot && at > outer_m && at < outer_m + foot.toe_m ? 0.6 : Infinity
-    return Math.min(wall, tip, inBerm, thin(at), 2.5)
+    return Math.min(scale * Math.min(wall, tip, inBerm, 2.5), thin(at))
   }
   return gridLines(stops([...places, ...tips, end]), size, spec.refinement)
 }
@@ -279,11 +283,13 @@ function rowLines(spec: SectionSpec): Float64Array {
   if (spec.footing) places.push(-spec.footing.depth_m)
   if (spec.skirt) places.push(spec.skirt.top_m, spec.skirt.bottom_m)
   const faces = [spec.floorLevel_m, soilTop]
+  const scale = cellScale(spec)
   const size = (z: number) => {
     const face = 0.03 + 0.26 * Math.min(...faces.map((level) => Math.abs(z - level)))
     const foot = spec.footing ? 0.12 + 0.26 * Math.abs(z + spec.footing.depth_m) : Infinity
     const layer = thin.find(([low, high]) => z > low && z < high)
-    return Math.min(face, foot, layer ? Math.max((layer[1] - layer[0]) / 3, 0.008) : Infinity, 1.6)
+    const inLayer = layer ? Math.max((layer[1] - layer[0]) / 3, 0.008) : Infinity
+    return Math.min(scale * Math.min(face, foot, 1.6), inLayer)
   }
   return gridLines(stops(places), size, spec.refinement).reverse()
 }
