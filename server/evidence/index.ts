@@ -1,10 +1,12 @@
 import { boxChecks } from './box.checks.ts'
+import { bridgesChecks } from './bridges.checks.ts'
 import { calibrationChecks } from './calibration.checks.ts'
 import type { CheckGroup } from './check.ts'
 import { climateChecks } from './climate.checks.ts'
 import { comfortChecks } from './comfort.checks.ts'
 import { glazingChecks } from './glazing.checks.ts'
 import { groundChecks } from './ground.checks.ts'
+import { groundStandardChecks } from './ground-standard.checks.ts'
 import { layersChecks } from './layers.checks.ts'
 import { massDepthChecks } from './mass-depth.checks.ts'
 import { measuredSoilChecks } from './measured-soil.checks.ts'
@@ -28,6 +30,8 @@ export const evidenceGroups: readonly CheckGroup[] = [
   layersChecks,
   slabChecks,
   groundChecks,
+  groundStandardChecks,
+  bridgesChecks,
   reductionChecks,
   soilChecks,
   measuredSoilChecks,
