@@ -7,6 +7,9 @@ export const MONTH_STARTS: readonly number[] = MONTH_DAYS.reduce<number[]>(
   [0],
 )
 
+/** First hour of each month and the year's end: 13 values. */
+export const MONTH_START_H: readonly number[] = MONTH_STARTS.map((day) => 24 * day)
+
 const NAMES = 'January February March April May June July August September October November December'
 export const MONTH_NAMES: readonly string[] = NAMES.split(' ')
 
@@ -15,6 +18,18 @@ export function monthOfDay(day: number): number {
   let month = 0
   while (day >= MONTH_STARTS[month + 1]) month++
   return month
+}
+
+/** Month (0 to 11) of an hour of the year (0 to 8,759). */
+export const monthOfHour = (hour: number): number => monthOfDay(Math.floor(hour / 24))
+
+/**
+ * Whether an hour of the day (0 to 23, its beginning) lies in a span that may pass midnight.
+ * Equal ends mean the whole day.
+ */
+export function hourWithin(hourOfDay: number, from_h: number, to_h: number): boolean {
+  if (from_h === to_h) return true
+  return from_h < to_h ? hourOfDay >= from_h && hourOfDay < to_h : hourOfDay >= from_h || hourOfDay < to_h
 }
 
 /** "5 March 14:00" for the hour that ends then; `index` 0 to 8759, hours end at 01:00 to 24:00. */

@@ -1,5 +1,5 @@
 import { HOURS } from '../climate/climate-year.ts'
-import { MONTH_START_H, monthOfHour } from '../zone/calendar.ts'
+import { MONTH_START_H, monthOfHour } from '../climate/calendar.ts'
 
 export const DAYS = 365
 export const J_PER_KWH = 3.6e6

@@ -1,4 +1,4 @@
-import { MONTH_START_H } from '../zone/calendar.ts'
+import { MONTH_START_H } from '../climate/calendar.ts'
 import { DAYS, dateOfDay, sum, type DayDate } from './months.ts'
 
 /** Swing: a day's highest minus its lowest operative temperature. */

@@ -1,10 +1,10 @@
+import { MONTH_DAYS } from '../climate/calendar.ts'
 import { HOURS, type ClimateYear } from '../climate/climate-year.ts'
 import { perezShares } from './perez.ts'
 import { incidenceCosine, type SunYear } from './sun.ts'
 
 const RAD = Math.PI / 180
 const COS_85 = Math.cos(85 * RAD)
-const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31]
 
 /** Sun on a plane by hour [W/m²], 8,760 values each. */
 export interface PlaneIrradiance {

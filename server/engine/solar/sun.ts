@@ -1,6 +1,7 @@
 /* eslint-disable no-restricted-globals -- suncalc takes its time as a Date; nothing here reads a clock */
 import { getPosition } from 'suncalc'
 import { HOURS, type ClimatePlace } from '../climate/climate-year.ts'
+import { extraterrestrialNormal } from '../climate/solar-day.ts'
 
 /**
  * The year whose sun stands for every year: 365 days, in the middle of the leap cycle, so that the dates
@@ -9,9 +10,6 @@ import { HOURS, type ClimatePlace } from '../climate/climate-year.ts'
 const REFERENCE_YEAR = 2014
 const HOUR_MS = 3_600_000
 const RAD = Math.PI / 180
-
-/** Extraterrestrial radiation at the mean distance of the sun [W/m²] (Kopp and Lean 2011). */
-export const SOLAR_CONSTANT_WM2 = 1361
 
 /** Where the sun stands in each of 8,760 hours; see ClimateYear for the hours. */
 export interface SunYear {
@@ -57,7 +55,7 @@ export function sunOfYear(place: ClimatePlace): SunYear {
     }
     altitude_deg[hour] = position.altitude_deg
     azimuth_deg[hour] = position.azimuth_deg
-    extraterrestrial_Wm2[hour] = extraterrestrialNormal(hour)
+    extraterrestrial_Wm2[hour] = extraterrestrialNormal(Math.floor(hour / 24))
   }
   return { altitude_deg, azimuth_deg, sunlit, extraterrestrial_Wm2 }
 }
@@ -78,19 +76,6 @@ function sunlitPart(place: ClimatePlace, hour: number): { share: number; middle_
     before = after
   }
   return share > 0 ? { share, middle_h: moment / share } : { share: 0, middle_h: hour + 0.5 }
-}
-
-/** Normal extraterrestrial radiation by hour of the year (Spencer 1971, from memory) [W/m²]. */
-function extraterrestrialNormal(hour: number): number {
-  const b = (2 * Math.PI * Math.floor(hour / 24)) / 365
-  return (
-    SOLAR_CONSTANT_WM2 *
-    (1.00011 +
-      0.034221 * Math.cos(b) +
-      0.00128 * Math.sin(b) +
-      0.000719 * Math.cos(2 * b) +
-      0.000077 * Math.sin(2 * b))
-  )
 }
 
 /** Cosine of the angle of incidence on a plane, negative behind it. */

@@ -1,3 +1,4 @@
+import { MONTH_DAYS } from '../climate/calendar.ts'
 import { HOURS, type ClimateYear } from '../climate/climate-year.ts'
 import type { WindowModel } from '../zone/house-model.ts'
 import { atIncidence } from './at-incidence.ts'
@@ -7,7 +8,6 @@ import { profileAngle, sideAngle, skyShare, sunlitShare } from './shading.ts'
 import type { SunYear } from './sun.ts'
 
 const RAD = Math.PI / 180
-const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31]
 
 /** Sun through the glass of one window, by hour [W]. */
 export interface WindowSun {

@@ -9,7 +9,7 @@ import type { HouseElement, HouseModel, RoomSurface } from './house-model.ts'
 import { outdoorDrives, type Drives } from './drives.ts'
 import { cachedElement, type ElementCache } from './element-cache.ts'
 import { windowSeries, type WindowSeries } from './window-series.ts'
-import { monthOfHour } from './calendar.ts'
+import { monthOfHour } from '../climate/calendar.ts'
 
 /** One surface of the room as the hour loop sees it. */
 export interface RoomFace {

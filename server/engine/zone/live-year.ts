@@ -2,7 +2,7 @@ import { HOURS, HOUR_S } from '../climate/climate-year.ts'
 import type { SteppedElement } from '../conduction/full-run.ts'
 import { leakageFlow } from './air.ts'
 import type { RunningElement, RunningHouse } from './assemble.ts'
-import { hourWithin } from './calendar.ts'
+import { hourWithin } from '../climate/calendar.ts'
 import type { PlantModel } from './house-model.ts'
 import type { Recorder } from './recorder.ts'
 

@@ -1,7 +1,7 @@
 import { HOURS, type ClimateYear } from '../climate/climate-year.ts'
 import { windowSun } from '../solar/window-sun.ts'
 import type { RoomFace } from './assemble.ts'
-import { hourWithin, monthOfHour } from './calendar.ts'
+import { hourWithin, monthOfHour } from '../climate/calendar.ts'
 import type { Drives } from './drives.ts'
 import type { HouseModel, WindowModel } from './house-model.ts'
 import { sunSharing } from './sun-sharing.ts'
