@@ -13,6 +13,7 @@ import { measuredSoilChecks } from './measured-soil.checks.ts'
 import { moistAirChecks } from './moist-air.checks.ts'
 import { networkChecks } from './network.checks.ts'
 import { reductionChecks } from './reduction.checks.ts'
+import { resistanceChecks } from './resistance.checks.ts'
 import { shadingChecks } from './shading.checks.ts'
 import { slabChecks } from './slab.checks.ts'
 import { soilChecks } from './soils.checks.ts'
@@ -27,6 +28,7 @@ export const evidenceGroups: readonly CheckGroup[] = [
   shadingChecks,
   glazingChecks,
   ...climateChecks,
+  resistanceChecks,
   layersChecks,
   slabChecks,
   groundChecks,
