@@ -1,9 +1,10 @@
 import { HOURS, type ClimateYear } from '../../server/engine/climate/climate-year.ts'
+import { temperatureField } from '../../server/engine/conduction/field.ts'
 import type { FullRunOptions } from '../../server/engine/conduction/full-run.ts'
 import type { SunYear } from '../../server/engine/solar/sun.ts'
 import { repeatingYear } from '../../server/engine/year/repeating-year.ts'
 import type { YearTrace } from '../../server/engine/year/year-trace.ts'
-import { assemble, type RunningElement, type RunningHouse } from '../../server/engine/zone/assemble.ts'
+import { assemble, type RunningHouse } from '../../server/engine/zone/assemble.ts'
 import type { ElementCache } from '../../server/engine/zone/element-cache.ts'
 import type { HouseModel } from '../../server/engine/zone/house-model.ts'
 import { liveYear } from '../../server/engine/zone/live-year.ts'
@@ -76,19 +77,10 @@ function liveFrom(
   house.air.start_C = start.air.start_C
   house.elements.forEach((element, i) => {
     element.state.set(start.elements[i].state)
-    element.full?.stepper.setField(fieldOf(start.elements[i]))
+    element.full?.stepper.setField(temperatureField(start.elements[i].reduced, start.elements[i].state))
   })
   // Recording adds less than a hundredth to a full year; the reduced loop is timed without it elsewhere.
   const recorder = traceRecorder(house, 0, false)
   const loopMs = once(() => liveYear(house, 0, null, recorder))
   return { trace: recorder.trace(), setUpMs, loopMs }
-}
-
-/** Temperature of every node, from the modes. */
-function fieldOf({ reduced, state, modes }: RunningElement): Float64Array {
-  return reduced.capacity_JK.map((_, node) => {
-    let value = 0
-    for (let k = 0; k < modes; k++) value += reduced.basis[node * modes + k] * state[k]
-    return value
-  })
 }

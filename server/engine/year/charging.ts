@@ -2,8 +2,10 @@ import { HOURS, HOUR_S } from '../climate/climate-year.ts'
 import { firstHarmonic } from '../climate/harmonic.ts'
 import type { GroundWave } from '../climate/ground.ts'
 import { undisturbedField } from '../conduction/field.ts'
+import { projectField } from '../conduction/full-run.ts'
 import type { SectionSpec } from '../conduction/specs.ts'
-import type { RunningElement, RunningHouse } from '../zone/assemble.ts'
+import type { RunningHouse } from '../zone/assemble.ts'
+import type { RunningElement } from '../zone/running-element.ts'
 import { MONTH_START_H } from '../climate/calendar.ts'
 import type { ElementCache } from '../zone/element-cache.ts'
 import { liveYear } from '../zone/live-year.ts'
@@ -66,12 +68,7 @@ function startUndisturbed(
   const equivalent = level.drive.linear_C.map((value, hour) => value + level.drive.step_K[hour])
   const wave = waveBelowFilm(equivalent, spec)
   const field = undisturbedField(mesh, wave, firstHour * HOUR_S)
-  const { basis, capacity_JK } = element.reduced
-  element.state.fill(0)
-  for (let node = 0; node < field.length; node++) {
-    const heat = capacity_JK[node] * field[node]
-    for (let k = 0; k < element.modes; k++) element.state[k] += basis[node * element.modes + k] * heat
-  }
+  projectField(element.reduced, field, element.state)
 }
 
 /**

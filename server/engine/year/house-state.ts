@@ -1,5 +1,6 @@
 import { HOURS } from '../climate/climate-year.ts'
-import type { RunningElement, RunningHouse } from '../zone/assemble.ts'
+import type { RunningHouse } from '../zone/assemble.ts'
+import type { RunningElement } from '../zone/running-element.ts'
 
 /** All modes of all elements, one after the other, and the room air last. */
 export function houseState(house: RunningHouse): Float64Array {

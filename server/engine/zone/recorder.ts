@@ -1,6 +1,7 @@
 import { HOURS } from '../climate/climate-year.ts'
 import type { ElementTrace, ProbeTrace, SurfaceTrace, YearTrace } from '../year/year-trace.ts'
-import type { RunningElement, RunningHouse } from './assemble.ts'
+import type { RunningHouse } from './assemble.ts'
+import type { RunningElement } from './running-element.ts'
 import { storedFlow } from './live-year.ts'
 
 /** What the hour loop says of the room each hour; flows into the room positive [W]. */

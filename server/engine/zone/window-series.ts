@@ -1,6 +1,6 @@
 import { HOURS, type ClimateYear } from '../climate/climate-year.ts'
 import { windowSun } from '../solar/window-sun.ts'
-import type { RoomFace } from './assemble.ts'
+import type { RoomFace } from './running-element.ts'
 import { hourWithin, monthOfHour } from '../climate/calendar.ts'
 import type { Drives } from './drives.ts'
 import type { HouseModel, WindowModel } from './house-model.ts'
