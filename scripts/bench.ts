@@ -1,6 +1,6 @@
-import { spawnSync } from 'node:child_process'
+import { execFile } from 'node:child_process'
 import { fileURLToPath } from 'node:url'
-import { parseArgs } from 'node:util'
+import { parseArgs, promisify } from 'node:util'
 import { HOURS } from '../server/engine/climate/climate-year.ts'
 import { benchFull } from './bench/full-comparison.ts'
 import { benchHouse, withGlass } from './bench/house.ts'
@@ -39,6 +39,17 @@ const { model, climate, sun } = await benchHouse()
 const sections = model.elements.filter(({ spec }) => spec.kind === 'section')
 const cache: ElementCache = new Map()
 
+// Memory is watched in a process of its own, on the other core; all that is compared below is timed here.
+const watched = promisify(execFile)(process.execPath, [
+  '--expose-gc',
+  '--import',
+  'tsx',
+  fileURLToPath(import.meta.url),
+  '--memory',
+  '--runs',
+  values.runs,
+]).then(({ stdout }) => JSON.parse(stdout) as Awaited<ReturnType<typeof measureMemory>>)
+
 say('Setting up sections …')
 const setUp = (refinement: number) => {
   const spec = { ...sections[0].spec, refinement } as (typeof sections)[0]['spec']
@@ -73,14 +84,8 @@ const dotMs = median(9, () => timeDot(multiplyAdds(house) * HOURS))
 say('Comparing reduced with full …')
 const full = benchFull(model, climate, sun, loopMs)
 
-say(`Watching memory over ${values.runs} runs …`)
-const child = spawnSync(
-  process.execPath,
-  ['--expose-gc', '--import', 'tsx', fileURLToPath(import.meta.url), '--memory', '--runs', values.runs],
-  { encoding: 'utf8', stdio: ['ignore', 'pipe', 'inherit'] },
-)
-if (child.status !== 0) process.exit(child.status ?? 1)
-const memory = JSON.parse(child.stdout) as Awaited<ReturnType<typeof measureMemory>>
+say(`Waiting for ${values.runs} runs in a row in a second process …`)
+const memory = await watched
 
 /** How a time grows when a size doubles, from two sizes. */
 const perDoubling = (small: { size: number; ms: number }, large: { size: number; ms: number }) =>

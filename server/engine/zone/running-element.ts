@@ -43,7 +43,7 @@ export interface RunningElement {
   readonly input: Float64Array
   /** decay, length modes. */
   readonly decay: Float64Array
-  /** `gain[k * columns + j]`. */
+  /** `gain[j * modes + k]`: input column j, mode k. */
   readonly gain: Float64Array
   /** Whole element: flow into it from group g is -Σ_k history[g * modes + k] m_k + Σ_j response[g * columns + j] input_j [W]. */
   readonly history: Float64Array
@@ -117,7 +117,7 @@ export function runningElement(
   const fill = (group: number, column: number, start: number, end: number) => {
     for (let k = 0; k < modes; k++) {
       const at = k * groups + group
-      gain[k * columns + column] += start * step.gain0[at] + end * step.gain1[at]
+      gain[column * modes + k] += start * step.gain0[at] + end * step.gain1[at]
     }
     for (let g = 0; g < groups; g++) {
       const at = g * groups + group
