@@ -3,6 +3,8 @@ import type { ClimatePlace } from '#engine/climate/climate-year.ts'
 import {
   declination,
   equationOfTime as spencerTime,
+  solarTimeShift,
+  sunsetAngle,
   SOLAR_CONSTANT_WM2 as GENERATOR_CONSTANT_WM2,
   sunHours,
 } from '#engine/climate/solar-day.ts'
@@ -32,6 +34,7 @@ export const sunChecks: CheckGroup = {
     ...incidence(),
     ...examples(),
     ...outside(),
+    ...clock(),
     ...masses(),
   ],
 }
@@ -344,6 +347,54 @@ function outside(): Check[] {
         tolerance: 0.05,
         computed: 60 * spencerTime(day - 1),
         note: 'Half of the last printed digit: the book rounds two of Spencer’s coefficients, the program does not.',
+      }),
+    ),
+  ]
+}
+
+/** The generator's solar time and length of the day. */
+function clock(): Check[] {
+  const madison = place(43, -89.4, -6)
+  const solarTime_s = (10.5 + solarTimeShift(madison, 33)) * 3600
+  const length_h = (latitude_deg: number, declination_rad: number) =>
+    (2 * sunsetAngle(latitude_deg, declination_rad) * 12) / Math.PI
+  return [
+    check({
+      id: 'SOL-03',
+      title: 'Solar time at Madison (89.4° west), 3 February, 10:30 standard time: 10:18:54',
+      source: `${BOOK}, example 1.5.1`,
+      provenance: 'looked up',
+      unit: 's',
+      expected: 10 * 3600 + 18 * 60 + 54,
+      tolerance: 2,
+      computed: solarTime_s,
+    }),
+    check({
+      id: 'SOL-06/sunset',
+      title: 'Hour angle of sunset at 43° north for a declination of -2.42°',
+      source: `${BOOK}, example 1.6.3`,
+      provenance: 'looked up',
+      unit: '°',
+      expected: 87.8,
+      tolerance: 0.15,
+      computed: sunsetAngle(43, -2.42 * RAD) / RAD,
+    }),
+    ...(
+      [
+        [172, 23.45, 14.85],
+        [81, 0, 12],
+        [355, -23.45, 9.15],
+      ] as const
+    ).map(([day, delta_deg, hours]) =>
+      check({
+        id: `SOL-10/length/${day}`,
+        title: `Length of day ${day} at 40° north, for Cooper’s declination of ${delta_deg}°`,
+        source: `${BOOK}, equation 1.6.11`,
+        provenance: 'derived',
+        unit: 'h',
+        expected: hours,
+        tolerance: 0.02,
+        computed: length_h(40, delta_deg * RAD),
       }),
     ),
   ]
