@@ -4,7 +4,7 @@ import type { WindowModel } from '../zone/house-model.ts'
 import { atIncidence } from './at-incidence.ts'
 import { planeIrradiance, type PlaneIrradiance } from './plane.ts'
 import { floorShare } from './lit-floor.ts'
-import { profileAngle, sideAngle, skyShare, sunlitShare } from './shading.ts'
+import { finShare, profileAngle, sideAngle, skyShare, sunlitShare } from './shading.ts'
 import type { SunYear } from './sun.ts'
 
 const RAD = Math.PI / 180
@@ -21,7 +21,7 @@ export interface WindowSun {
 
 /**
  * Sun through a window: beam and circumsolar light at their angle of incidence and behind overhang and fins,
- * light of sky and ground as diffuse light, both less the frame and a seasonal shade.
+ * light of sky and ground as diffuse light, less what they take of either, the frame and a seasonal shade.
  *
  * @param roomDepth_m from the window to the wall across, for where the beam lands
  * @param plane radiation on the window's plane, where it is known already
@@ -43,27 +43,29 @@ export function windowSun(
   }
   const { glazing, exposure } = window
   const glass_m2 = window.area_m2 * (1 - window.frameShare)
-  const sky = skyShare(window)
+  const { tilt_deg, faces_deg } = exposure
+  const sky = skyShare(window, tilt_deg)
+  const ground = finShare(window)
   let hour = 0
   for (let month = 0; month < 12; month++) {
     const passes = window.shade?.months.includes(month + 1) ? window.shade.passes : 1
     for (const end = hour + 24 * MONTH_DAYS[month]; hour < end; hour++) {
-      const diffuse_W = (plane.sky_Wm2[hour] * sky + plane.ground_Wm2[hour]) * glass_m2 * passes
+      const diffuse_W = (plane.sky_Wm2[hour] * sky + plane.ground_Wm2[hour] * ground) * glass_m2 * passes
       out.transmittedDiffuse_W[hour] = diffuse_W * glazing.diffuseTransmittance
       out.inward_W[hour] = diffuse_W * (glazing.diffuseSolarFactor - glazing.diffuseTransmittance)
       const beam = plane.beam_Wm2[hour]
       if (beam <= 0) continue
       const cosine = plane.incidence[hour]
       const incidence_deg = Math.acos(Math.min(1, cosine)) / RAD
-      const side_deg = sideAngle(sun.azimuth_deg[hour], exposure.faces_deg)
-      const profile_deg = profileAngle(sun.altitude_deg[hour], side_deg)
-      const lit = exposure.tilt_deg > 60 ? sunlitShare(window, profile_deg, side_deg) : 1
-      const beam_W = beam * glass_m2 * passes * lit
+      const side_deg = sideAngle(sun.azimuth_deg[hour], faces_deg)
+      const altitude_deg = sun.altitude_deg[hour]
+      const beam_W = beam * glass_m2 * passes * sunlitShare(window, altitude_deg, side_deg, tilt_deg)
       const transmittance = atIncidence(glazing.transmittance, incidence_deg)
       out.transmittedBeam_W[hour] = beam_W * transmittance
       out.inward_W[hour] +=
         beam_W * Math.max(0, atIncidence(glazing.solarFactor, incidence_deg) - transmittance)
-      out.floorShare[hour] = floorShare(window, profile_deg, roomDepth_m)
+      const profile_deg = profileAngle(altitude_deg, side_deg)
+      out.floorShare[hour] = floorShare(window, profile_deg, roomDepth_m, tilt_deg)
     }
   }
   return out
