@@ -17,6 +17,7 @@ import { resistanceChecks } from './resistance.checks.ts'
 import { shadingChecks } from './shading.checks.ts'
 import { slabChecks } from './slab.checks.ts'
 import { soilChecks } from './soils.checks.ts'
+import { stationSunChecks } from './station-sun.checks.ts'
 import { sunChecks } from './sun.checks.ts'
 import { tiltedChecks } from './tilted.checks.ts'
 import { tradeChecks } from './trade.checks.ts'
@@ -24,6 +25,7 @@ import { tradeChecks } from './trade.checks.ts'
 /** Every topic of the evidence, in the order in which it is shown. */
 export const evidenceGroups: readonly CheckGroup[] = [
   sunChecks,
+  stationSunChecks,
   tiltedChecks,
   shadingChecks,
   glazingChecks,
