@@ -1,5 +1,6 @@
 import { PEREZ_1990, perezShares } from '#engine/solar/perez.ts'
 import { check, type Check, type CheckGroup, type EvidenceInputs } from './check.ts'
+import { bookSun } from './parts/book-sun.ts'
 import { planeUnder, type OneSun } from './parts/one-sun.ts'
 
 const PAPER = 'R. Perez et al., Solar Energy 44(5), 1990'
@@ -37,20 +38,63 @@ function bookHour(): Check[] {
   const up = Math.cos(zenith_deg * RAD)
   const sky = { diffuse: 0.796 * W, beam: (0.244 / up) * W, outside: (2.335 / up) * W }
   const shares = perezShares(sky.diffuse, sky.beam, sky.outside, zenith_deg, 1 / up)
-  const row = (id: string, title: string, expected: number, computed: number) =>
+  const place = bookSun(40, -11.58, 9.5)
+  const light = { beam_Wm2: sky.beam, diffuse_Wm2: sky.diffuse, global_Wm2: 1.04 * W }
+  const plane = planeUnder({ ...place, ...light, extraterrestrial_Wm2: sky.outside }, 60, 180, 0.6)
+  const beamOnly = planeUnder(
+    { ...place, ...light, diffuse_Wm2: 0, extraterrestrial_Wm2: sky.outside },
+    60,
+    180,
+    0.6,
+  )
+  const row = (
+    id: string,
+    title: string,
+    expected: number,
+    computed: number,
+    example = '2.16.2',
+    unit = '-',
+  ) =>
     check({
-      id: `TRN-05/${id}`,
+      id: `TRN-${id}`,
       title,
-      source: 'Duffie and Beckman, Solar Engineering of Thermal Processes, example 2.16.2',
+      source: `Duffie and Beckman, Solar Engineering of Thermal Processes, example ${example}`,
       provenance: 'derived',
-      unit: '-',
+      unit,
       expected,
       tolerance: 0.005,
       computed,
     })
   return [
-    row('F1', 'Share from around the sun, book’s hour', 0.2561, shares.circumsolar),
-    row('F2', 'Share of the horizon band, book’s hour', 0.005, shares.horizon),
+    row('05/F1', 'Share from around the sun, book’s hour', 0.2561, shares.circumsolar),
+    row('05/F2', 'Share of the horizon band, book’s hour', 0.005, shares.horizon),
+    row(
+      '02/beam',
+      'Beam on a plane at 60°, 40° north, 20 February, 9 to 10 h',
+      0.418,
+      beamOnly.beam / W,
+      '2.15.1',
+      'MJ/m²',
+    ),
+    row(
+      '02/ground',
+      'Light of the ground on that plane, reflectance 0.6',
+      0.156,
+      plane.ground / W,
+      '2.15.1',
+      'MJ/m²',
+    ),
+    {
+      ...row(
+        '05/total',
+        'All light on that plane, sky after Perez',
+        1.371,
+        (plane.beam + plane.sky + plane.ground) / W,
+        '2.16.2',
+        'MJ/m²',
+      ),
+      note: 'The example takes 1 / cos of the zenith angle for air mass; the program’s, after Kasten and Young, is 0.2 % less there.',
+    },
   ]
 }
 
@@ -108,6 +152,7 @@ function ownSky(): Check[] {
 function identities(): Check[] {
   const flat = planeUnder(SKY, 0, 180, 0.2)
   const leaning = planeUnder(SKY, 60, 180, 0.6)
+  const dark = planeUnder({ ...SKY, altitude_deg: -5, beam_Wm2: 0 }, 60, 180, 0)
   const row = (id: string, title: string, expected: number, computed: number) =>
     check({
       id: `TRN-08/${id}`,
@@ -122,5 +167,6 @@ function identities(): Check[] {
   return [
     row('flat', 'A level plane gets what the horizontal gets', 500, flat.beam + flat.sky + flat.ground),
     row('ground', 'Light of the ground on a plane at 60°, reflectance 0.6', 500 * 0.6 * 0.25, leaning.ground),
+    row('even', 'Sky at twilight, even all over, on a plane at 60°', 200 * 0.75, dark.sky),
   ]
 }

@@ -140,7 +140,8 @@ const WINDOW_CONDUCTANCE: StackConductance = {
  * Glazing data from the few numbers a catalogue prints. Transmittance and solar factor at normal incidence are
  * the given ones; over the angle both follow the curves of as many clear panes, scaled. Tables of the ASHRAE
  * Handbook of Fundamentals, as remembered, lie up to 0.04 lower for two panes and 0.06 for three, near 60 to
- * 80 degrees.
+ * 80 degrees: they follow when the polarizations are averaged pane by pane, which loses light that stays
+ * polarized.
  *
  * @param u_Wm2K air to air
  * @param g solar factor at normal incidence

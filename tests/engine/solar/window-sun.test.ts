@@ -2,7 +2,7 @@ import { expect, test } from 'vitest'
 import { HOURS, type ClimateYear } from '#engine/climate/climate-year.ts'
 import { catalogueGlazing } from '#engine/solar/glazing.ts'
 import { horizonAt, planeIrradiance } from '#engine/solar/plane.ts'
-import { incidenceCosine, sunOfYear } from '#engine/solar/sun.ts'
+import { incidenceCosine, sunOfYear, type SunYear } from '#engine/solar/sun.ts'
 import { windowSun } from '#engine/solar/window-sun.ts'
 import type { WindowModel } from '#engine/zone/house-model.ts'
 
@@ -68,6 +68,68 @@ test('under a sky alike in the morning and the evening, east and west windows ge
   const ratio = sum(east.transmittedBeam_W) / sum(west.transmittedBeam_W)
   expect(Math.abs(ratio - 1)).toBeLessThan(0.01)
   expect(Math.abs(sum(east.floorShare) / sum(west.floorShare) - 1)).toBeLessThan(0.02)
+})
+
+/** The same hours backwards, day by day, under a sun mirrored from east to west. */
+const backwards = (values: Float64Array) =>
+  all((hour) => values[24 * Math.floor(hour / 24) + 23 - (hour % 24)])
+const mirroredSun: SunYear = {
+  altitude_deg: backwards(sun.altitude_deg),
+  azimuth_deg: backwards(sun.azimuth_deg.map((azimuth) => 360 - azimuth)),
+  sunlit: backwards(sun.sunlit),
+  extraterrestrial_Wm2: backwards(sun.extraterrestrial_Wm2),
+}
+const mirroredClimate: ClimateYear = {
+  ...climate,
+  beam_Wm2: backwards(beam_Wm2),
+  diffuse_Wm2: backwards(diffuse_Wm2),
+  global_Wm2: backwards(climate.global_Wm2),
+}
+
+test('mirrored about noon, east and west windows trade places hour by hour, with plates, lean and horizon', () => {
+  const plates = {
+    overhang: { depth_m: 0.6, rise_m: 0.1, extra_m: 0.2 },
+    fins: { depth_m: 0.3, gap_m: 0.05 },
+  }
+  const horizon = Array.from({ length: 36 }, (_, i) => 10 + 9 * Math.sin(i))
+  const mirroredHorizon = horizon.map((_, i) => horizon[(36 - i) % 36])
+  for (const [faces_deg, tilt_deg] of [
+    [90, 90],
+    [140, 60],
+  ]) {
+    const one = windowFacing(faces_deg, plates)
+    const other = windowFacing(360 - faces_deg, plates)
+    const lean = (window: WindowModel) => ({ ...window, exposure: { ...window.exposure, tilt_deg } })
+    const here = windowSun(climate, sun, lean(one), GROUND, horizon, 4)
+    const there = windowSun(mirroredClimate, mirroredSun, lean(other), GROUND, mirroredHorizon, 4)
+    expect(sum(here.transmittedBeam_W)).toBeGreaterThan(1e5)
+    for (const name of ['transmittedBeam_W', 'transmittedDiffuse_W', 'inward_W', 'floorShare'] as const) {
+      const turned = backwards(there[name])
+      for (let hour = 0; hour < HOURS; hour++)
+        if (!(Math.abs(here[name][hour] - turned[hour]) < 1e-6))
+          expect.fail(`${name} at hour ${hour}: ${here[name][hour]} and ${turned[hour]}`)
+    }
+  }
+})
+
+test('fins take their share of the ground’s light as of the sky’s', () => {
+  const fins = { depth_m: 0.6, gap_m: 0.1 }
+  const night = { ...climate, beam_Wm2: all(() => 0), diffuse_Wm2: all(() => 0), global_Wm2: all(() => 100) }
+  const lit = (window: WindowModel) => sum(windowSun(night, sun, window, GROUND, [], 4).transmittedDiffuse_W)
+  const left = lit(windowFacing(180, { fins })) / lit(windowFacing(180))
+  // Crossed strings: each fin has (w + near - far) / 2w of the view.
+  const near = Math.hypot(0.1, 0.6)
+  const far = Math.hypot(2.1, 0.6)
+  expect(left).toBeCloseTo(1 - (2 + near - far) / 2, 9)
+})
+
+test('without sun or light nothing comes in, and a plane known already gives the same window', () => {
+  const dark = { ...climate, beam_Wm2: all(() => 0), diffuse_Wm2: all(() => 0), global_Wm2: all(() => 0) }
+  const none = windowSun(dark, sun, windowFacing(180), GROUND, [], 4)
+  expect(sum(none.transmittedBeam_W) + sum(none.transmittedDiffuse_W) + sum(none.inward_W)).toBe(0)
+  const window = windowFacing(150)
+  const plane = planeIrradiance(climate, sun, window.exposure, GROUND, [])
+  expect(windowSun(climate, sun, window, GROUND, [], 4, plane)).toEqual(through(window))
 })
 
 test('a window never lets in more than its solar factor of what meets its glass, nor less than nothing', () => {
