@@ -60,6 +60,24 @@ export function sunOfYear(place: ClimatePlace): SunYear {
   return { altitude_deg, azimuth_deg, sunlit, extraterrestrial_Wm2 }
 }
 
+/** Where within a span the sun crosses the horizon, as a share of it; refraction bends the way, so twice refined. */
+function horizonCrossing(
+  place: ClimatePlace,
+  from_h: number,
+  span_h: number,
+  before_deg: number,
+  after_deg: number,
+): number {
+  let [low, high, atLow, atHigh] = [0, 1, before_deg, after_deg]
+  for (let pass = 0; pass < 2; pass++) {
+    const middle = low + ((high - low) * atLow) / (atLow - atHigh)
+    const atMiddle = sunAt(place, from_h + middle * span_h).altitude_deg
+    if (atMiddle > 0 === atLow > 0) [low, atLow] = [middle, atMiddle]
+    else [high, atHigh] = [middle, atMiddle]
+  }
+  return low + ((high - low) * atLow) / (atLow - atHigh)
+}
+
 function sunlitPart(place: ClimatePlace, hour: number): { share: number; middle_h: number } {
   const parts = 4
   let share = 0
@@ -67,7 +85,8 @@ function sunlitPart(place: ClimatePlace, hour: number): { share: number; middle_
   let before = sunAt(place, hour).altitude_deg
   for (let i = 0; i < parts; i++) {
     const after = sunAt(place, hour + (i + 1) / parts).altitude_deg
-    const crossing = before === after ? 0 : before / (before - after)
+    const crossing =
+      before > 0 === after > 0 ? 0 : horizonCrossing(place, hour + i / parts, 1 / parts, before, after)
     const from = before > 0 ? 0 : after > 0 ? crossing : 1
     const to = after > 0 ? 1 : before > 0 ? crossing : 1
     const lit = Math.max(0, to - from) / parts
